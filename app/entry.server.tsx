@@ -4,8 +4,8 @@ import { isbot } from 'isbot';
 import { renderToPipeableStream } from 'react-dom/server';
 import type { EntryContext, HandleErrorFunction, RouterContextProvider } from 'react-router';
 import { isRouteErrorResponse, ServerRouter } from 'react-router';
-import { nonceContext } from '~/services/security-headers.server';
 import { log } from '~/services/log.server';
+import { nonceContext } from '~/services/security-headers.server';
 
 /** Milliseconds after which a page that has not finished streaming is given up. */
 export const streamTimeout = 10_000;
@@ -29,9 +29,7 @@ export default function handleRequest(
           shellSent = true;
           const body = new PassThrough();
           headers.set('Content-Type', 'text/html; charset=utf-8');
-          resolve(
-            new Response(createReadableStreamFromReadable(body), { headers, status }),
-          );
+          resolve(new Response(createReadableStreamFromReadable(body), { headers, status }));
           pipe(body);
         },
         onShellError: reject,

@@ -1,0 +1,52 @@
+import { createContext, type RouterContextProvider, redirect } from 'react-router';
+import type { Actor } from '~/access/can';
+import type { PressureUnit } from '~/units';
+import { findViewer } from './login-session.server';
+import { Refusal } from './refusal.server';
+
+/** Who is signed in on the browser that asks. */
+export interface Viewer {
+  readonly sessionId: string;
+  readonly email: string;
+  readonly name: string;
+  readonly pressureUnit: PressureUnit;
+  readonly actor: Actor;
+}
+
+type Lookup = () => Promise<Viewer | null>;
+const viewerContext = createContext<Lookup>();
+
+/** Looks the viewer up at most once a request, and only when somebody asks. */
+export async function provideViewer(
+  { request, context }: { request: Request; context: Readonly<RouterContextProvider> },
+  next: () => Promise<Response>,
+): Promise<Response> {
+  let found: Promise<Viewer | null> | undefined;
+  context.set(viewerContext, () => {
+    found ??= findViewer(request);
+    return found;
+  });
+  return next();
+}
+
+/** The viewer, or null when nobody is signed in. */
+export const viewerOf = (context: Readonly<RouterContextProvider>) => context.get(viewerContext)();
+
+/** The viewer of a page; sends to sign-in and back when nobody is signed in. */
+export async function requireViewer(
+  context: Readonly<RouterContextProvider>,
+  request: Request,
+): Promise<Viewer> {
+  const viewer = await viewerOf(context);
+  if (viewer) return viewer;
+  const url = new URL(request.url);
+  const back = url.pathname.replace(/\.data$/, '') + url.search;
+  throw redirect(`/login?to=${encodeURIComponent(back)}`);
+}
+
+/** The viewer of an API route; refuses with 401 when nobody is signed in. */
+export async function requireApiViewer(context: Readonly<RouterContextProvider>): Promise<Viewer> {
+  const viewer = await viewerOf(context);
+  if (viewer) return viewer;
+  throw new Refusal('not-signed-in', 'not-signed-in', 'Sign in and send it again.');
+}
