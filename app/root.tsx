@@ -58,7 +58,7 @@ export default function Root() {
 }
 
 export function ErrorBoundary({ error }: Route.ErrorBoundaryProps) {
-  const { title, words } = describe(error);
+  const { title, words } = describeError(error);
   return (
     <main className="page">
       <title>{`${title} · Valveside`}</title>
@@ -72,7 +72,7 @@ export function ErrorBoundary({ error }: Route.ErrorBoundaryProps) {
 }
 
 /** What a person may read of an error; the text of a fault is never shown. */
-function describe(error: unknown): { title: string; words: string } {
+function describeError(error: unknown): { title: string; words: string } {
   const fault = {
     title: 'This did not work',
     words: 'The fault is ours. Try it again in a minute.',
