@@ -1,5 +1,5 @@
 import { DataTypes, type InferAttributes, type InferCreationAttributes, Model } from 'sequelize';
-import type { AxleKind } from '~/loads';
+import type { Axle as AxleKind } from '~/loads';
 import { sequelize } from './database.server';
 
 /** One axle of a coach. */
