@@ -31,6 +31,12 @@ const schema = z.object({
     .refine((text) => isPort(text), 'expected a port number between 1 and 65535')
     .transform(Number),
   HOST: z.string().min(1, 'expected an address to listen on').default('127.0.0.1'),
+  /** Proxies in front whose `X-Forwarded-For` is believed; 0 when people reach the server itself. */
+  TRUSTED_PROXIES: z
+    .string()
+    .default('0')
+    .refine((text) => /^\d$/.test(text), 'expected how many proxies stand in front, 0 to 9')
+    .transform(Number),
   LOG_LEVEL: z
     .enum(['fatal', 'error', 'warn', 'info', 'debug', 'trace', 'silent'], {
       error: 'expected one of fatal, error, warn, info, debug, trace, silent',

@@ -9,11 +9,12 @@ import {
 } from 'react-router';
 import type { Route } from './+types/root';
 import './app.css';
+import { sameOrigin } from '~/services/same-origin.server';
 import { nonceContext, securityHeaders } from '~/services/security-headers.server';
 import { readTheme } from '~/services/theme.server';
 import { provideViewer, viewerOf } from '~/services/viewer.server';
 
-export const middleware: Route.MiddlewareFunction[] = [securityHeaders, provideViewer];
+export const middleware: Route.MiddlewareFunction[] = [securityHeaders, sameOrigin, provideViewer];
 
 export async function loader({ request, context }: Route.LoaderArgs) {
   const viewer = await viewerOf(context);

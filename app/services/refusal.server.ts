@@ -17,6 +17,7 @@ const statusOf = {
   conflict: 409,
   'too-large': 413,
   'too-many': 429,
+  unavailable: 503,
 } as const;
 
 /**

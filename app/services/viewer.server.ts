@@ -1,17 +1,8 @@
 import { createContext, type RouterContextProvider, redirect } from 'react-router';
-import type { Actor } from '~/access/can';
-import type { PressureUnit } from '~/units';
-import { findViewer } from './login-session.server';
+import { findViewer, type Viewer } from './login-session.server';
 import { Refusal } from './refusal.server';
 
-/** Who is signed in on the browser that asks. */
-export interface Viewer {
-  readonly sessionId: string;
-  readonly email: string;
-  readonly name: string;
-  readonly pressureUnit: PressureUnit;
-  readonly actor: Actor;
-}
+export type { Viewer };
 
 type Lookup = () => Promise<Viewer | null>;
 const viewerContext = createContext<Lookup>();
