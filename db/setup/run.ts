@@ -1,4 +1,5 @@
-import { type SpawnOptions, spawn } from 'node:child_process';
+import { type ChildProcess, type SpawnOptions, spawn } from 'node:child_process';
+import { projectRoot } from './paths';
 
 export interface Finished {
   readonly code: number;
@@ -34,6 +35,46 @@ export async function runOrThrow(
   const { code, output } = await run(command, args, options);
   if (code !== 0) throw new Error(`${command} ${args.join(' ')} failed (${code}):\n${output}`);
   return output;
+}
+
+const visible = new Set<ChildProcess>();
+
+/**
+ * Runs a program of the project in its folder, with its lines on the terminal.
+ * @returns its exit code
+ */
+export function runVisibly(
+  command: string,
+  args: readonly string[],
+  env: NodeJS.ProcessEnv = process.env,
+): Promise<number> {
+  // A group of its own, so that stopping it takes along whatever it started.
+  const child = spawn(command, args, {
+    cwd: projectRoot,
+    env,
+    detached: true,
+    stdio: ['ignore', 'inherit', 'inherit'],
+  });
+  visible.add(child);
+  return new Promise((resolve) => {
+    const end = (code: number) => {
+      visible.delete(child);
+      resolve(code);
+    };
+    child.on('error', () => end(127));
+    child.on('exit', (code) => end(code ?? 1));
+  });
+}
+
+/** Ends every program that `runVisibly` still waits for, with its descendants. */
+export function endVisible(): void {
+  for (const { pid } of visible) {
+    try {
+      if (pid) process.kill(-pid, 'SIGTERM');
+    } catch {
+      // It ended in the meantime.
+    }
+  }
 }
 
 export const wait = (milliseconds: number) =>
