@@ -1,0 +1,181 @@
+/**
+ * Running members ahead under a plan, with the same step function as the filter. A plan is where
+ * to begin; after that every member follows the cycle: on while it gains, off when it does not,
+ * bring the supply down where the coach allows it, on again on the rising side.
+ */
+import { type Controls, createMembers, type Members, PATH, sourceAbs, step } from './coach';
+import type { LowerBy } from './contract';
+import type { Ensemble } from './ensemble';
+import { pickByWeight } from './renewal';
+
+export const ROLLOUT_MEMBERS = 40;
+const ROLLOUT_STEP_S = 1;
+export const HORIZON_S = 300;
+
+export type Plan = 'on-now' | 'wait' | 'lower' | 'stop-lowering' | 'keep-on' | 'off-now';
+
+/** What hands need, s. */
+export interface Hands {
+  putOn: number;
+  takeOff: number;
+  gauge: number;
+  /** From the call to the first fall of pressure, and from the stop back to the wheel. */
+  toLowering: number;
+  fromLowering: number;
+}
+
+export interface Goal {
+  /** Absolute kPa, settled: where to stop, and what is good enough. */
+  aimAbs: number;
+  enoughAbs: number;
+  limitAbs: number;
+  /** How the supply may be brought down; none: wait for it. */
+  by: LowerBy | undefined;
+  lowestAbs: number;
+  hands: Hands;
+}
+
+export interface Outcome {
+  /** Per member: seconds until the call changes, until done (capped), kPa lost by reverse flow. */
+  change: Float64Array;
+  done: Float64Array;
+  lost: Float64Array;
+}
+
+/** Gain a second, kPa, under which a hold on a falling supply is given up. */
+const LEAST_GAIN = 0.06;
+/** The supply must stand this much above the tire before the chuck goes on, kPa. */
+export const MARGIN_KPA = 1.5;
+/** A tire that is still low at the end is charged this much time a kPa. */
+const SECONDS_PER_KPA = 8;
+
+const PHASE = {
+  waiting: 0,
+  puttingOn: 1,
+  on: 2,
+  takingOff: 3,
+  goingToLower: 4,
+  lowering: 5,
+  comingBack: 6,
+  gauging: 7,
+} as const;
+type Phase = (typeof PHASE)[keyof typeof PHASE];
+
+const work = createMembers(ROLLOUT_MEMBERS);
+
+/** An even sample of the ensemble for rollouts; all rollouts of one advice start from it. */
+export function sampleFor(e: Ensemble): Members {
+  const sample = createMembers(ROLLOUT_MEMBERS);
+  pickByWeight(e.members, e.weights, sample, 0.5);
+  return sample;
+}
+
+export function createOutcome(): Outcome {
+  return {
+    change: new Float64Array(ROLLOUT_MEMBERS),
+    done: new Float64Array(ROLLOUT_MEMBERS),
+    lost: new Float64Array(ROLLOUT_MEMBERS),
+  };
+}
+
+export function rollOut(sample: Members, plan: Plan, goal: Goal, atmosphereKpa: number): Outcome {
+  work.all.set(sample.all);
+  const outcome = createOutcome();
+  const still: Controls = { pedal: false, drain: false, bleeding: false, atmosphereKpa };
+  const lowering: Controls = { ...still, [goal.by ?? 'drain']: true };
+  for (let i = 0; i < work.n; i++) runMember(i, plan, goal, still, lowering, outcome);
+  return outcome;
+}
+
+function firstPhase(plan: Plan): Phase {
+  if (plan === 'on-now') return PHASE.puttingOn;
+  if (plan === 'keep-on') return PHASE.on;
+  if (plan === 'off-now') return PHASE.takingOff;
+  if (plan === 'lower') return PHASE.goingToLower;
+  return plan === 'stop-lowering' ? PHASE.comingBack : PHASE.waiting;
+}
+
+/** How long a phase lasts that only takes time; the others end by what the air does. */
+function lasting(phase: Phase, hands: Hands): number {
+  if (phase === PHASE.puttingOn) return hands.putOn;
+  if (phase === PHASE.takingOff) return hands.takeOff;
+  if (phase === PHASE.goingToLower) return hands.toLowering;
+  if (phase === PHASE.comingBack) return hands.fromLowering;
+  return phase === PHASE.gauging ? hands.gauge : -1;
+}
+
+function runMember(
+  i: number,
+  plan: Plan,
+  goal: Goal,
+  still: Controls,
+  lowering: Controls,
+  outcome: Outcome,
+): void {
+  const m = work;
+  let phase: Phase = firstPhase(plan);
+  const first = phase;
+  let left = lasting(phase, goal.hands);
+  let change = -1;
+  let lost = 0;
+  let t = 0;
+  const openPath = m.path[i] === PATH.off ? PATH.seated : m.path[i]!;
+  if (phase === PHASE.waiting || phase >= PHASE.goingToLower) m.path[i] = PATH.off;
+  for (; t < HORIZON_S; t += ROLLOUT_STEP_S) {
+    const next = nextPhase(m, i, phase, left, goal);
+    if (next !== phase) {
+      if (change < 0 && !(plan === 'on-now' && first === phase)) change = t;
+      if (phase === PHASE.gauging && next === PHASE.on) break;
+      phase = next;
+      left = lasting(phase, goal.hands);
+      if (phase === PHASE.on) m.path[i] = openPath;
+      if (phase !== PHASE.on && phase !== PHASE.takingOff) m.path[i] = PATH.off;
+    }
+    step(m, i, i + 1, ROLLOUT_STEP_S, phase === PHASE.lowering ? lowering : still);
+    if (m.flow[i]! < 0) lost -= m.flow[i]! / m.tireL[i]!;
+    left -= ROLLOUT_STEP_S;
+  }
+  const short = Math.max(0, goal.enoughAbs - m.tireAbs[i]!);
+  outcome.change[i] = change < 0 ? HORIZON_S : change;
+  outcome.done[i] = t >= HORIZON_S ? HORIZON_S + short * SECONDS_PER_KPA : t;
+  outcome.lost[i] = lost;
+}
+
+function nextPhase(m: Members, i: number, phase: Phase, left: number, goal: Goal): Phase {
+  const tire = m.tireAbs[i]!;
+  switch (phase) {
+    case PHASE.waiting:
+      if (tire >= goal.enoughAbs) return PHASE.gauging;
+      return m.loaded[i] === 1 && sourceAbs(m, i) > tire + MARGIN_KPA ? PHASE.puttingOn : phase;
+    case PHASE.puttingOn:
+      return left <= 0 ? PHASE.on : phase;
+    case PHASE.on:
+      return endsHold(m, i, goal) ? PHASE.takingOff : phase;
+    case PHASE.takingOff:
+      if (left > 0) return phase;
+      if (tire >= goal.enoughAbs) return PHASE.gauging;
+      return goal.by && m.loaded[i] === 0 ? PHASE.goingToLower : PHASE.waiting;
+    case PHASE.goingToLower:
+      return left <= 0 ? PHASE.lowering : phase;
+    case PHASE.lowering:
+      return m.loaded[i] === 1 || m.supplyAbs[i]! < goal.lowestAbs ? PHASE.comingBack : phase;
+    case PHASE.comingBack:
+      return left <= 0 ? PHASE.waiting : phase;
+    case PHASE.gauging:
+      return left <= 0 ? PHASE.on : phase;
+  }
+}
+
+function endsHold(m: Members, i: number, goal: Goal): boolean {
+  const gain = m.flow[i]! / m.tireL[i]!;
+  if (m.tireAbs[i]! + gain * goal.hands.takeOff >= goal.aimAbs) return true;
+  if (sourceAbs(m, i) < m.tireAbs[i]! + m.warmth[i]! && m.loaded[i] === 0) return true;
+  return m.loaded[i] === 0 && m.sinceSwitch[i]! > 1 && gain < LEAST_GAIN;
+}
+
+/** Mean time to done, with lost air charged. */
+export function costOf(outcome: Outcome): number {
+  let sum = 0;
+  for (let i = 0; i < ROLLOUT_MEMBERS; i++) sum += outcome.done[i]! + 25 * outcome.lost[i]!;
+  return sum / ROLLOUT_MEMBERS;
+}
