@@ -38,6 +38,7 @@ export const LASTING_FIELDS = [
   'wheelBias', // kPa, against the gauge that reads the tire
   'dashBias',
   'pedalDropsIdle', // 1: pressing the pedal ends fast idle
+  'purgeKpa', // what the drier takes from the supply tank at cut-out
   'missesPurge', // chance that a purge is not tapped
   'deadCompressor', // 1: pumps nothing
 ] as const;
@@ -100,18 +101,62 @@ export function flowShare(ratio: number): number {
 /**
  * Advances members `from` to `to` (exclusive) by h seconds.
  * Air passes check valves within the step; a flow never passes the point of equal pressure.
+ * One long function with locals, since it is the hot loop of everything.
  */
 export function step(m: Members, from: number, to: number, h: number, controls: Controls): void {
-  const atmosphere = controls.atmosphereKpa;
+  const { atmosphereKpa: atmosphere, pedal, drain, bleeding } = controls;
   for (let i = from; i < to; i++) {
-    const before = sourceAbs(m, i);
-    compress(m, i, h, atmosphere);
-    leakAndLower(m, i, h, controls);
-    passCheckValves(m, i, atmosphere);
-    fillTire(m, i, h, atmosphere);
-    if (controls.bleeding) bleed(m, i, h, atmosphere);
-    govern(m, i, h, atmosphere);
+    const fitting = m.fitting[i]!;
+    const supplyL = m.supplyL[i]!;
+    const serviceL = m.serviceL[i]!;
+    let supply = m.supplyAbs[i]!;
+    let service = m.serviceAbs[i]!;
+    let accessory = m.accessoryAbs[i]!;
+    const before =
+      fitting === FITTING.supply ? supply : fitting === FITTING.service ? service : accessory;
+
+    const speed = m.speed[i]!;
+    if (m.loaded[i] === 1 && speed !== SPEED.off && m.deadCompressor[i] === 0) {
+      const rated = speed === SPEED.idle ? m.idleFlow[i]! : m.fastFlow[i]!;
+      const bar = (supply - atmosphere) / 100;
+      const share = Math.max(0, 1 - CLEARANCE_PER_BAR * (bar - DELIVERY_AT_BAR));
+      supply += (rated * share * 100 * ANR * h) / supplyL;
+    }
+
+    const kept = 1 - m.leak[i]! * h;
+    supply = atmosphere + (supply - atmosphere) * kept;
+    service = atmosphere + (service - atmosphere) * kept;
+    accessory = atmosphere + (accessory - atmosphere) * kept;
+    if (pedal) service = Math.max(atmosphere, service - m.pedalKpaS[i]! * h);
+    if (drain) {
+      const out = m.drainC[i]! * supply * ANR * flowShare(atmosphere / supply) * h;
+      supply = Math.max(atmosphere, supply - out / supplyL);
+    }
+
+    // Check valves: the supply feeds accessory and service, never back.
+    if (fitting === FITTING.accessory && supply > accessory) {
+      if (supply - atmosphere > m.protectionKpa[i]!) {
+        const accessoryL = m.accessoryL[i]!;
+        supply = (supply * supplyL + accessory * accessoryL) / (supplyL + accessoryL);
+        accessory = supply;
+      }
+    }
+    if (supply > service) {
+      supply = (supply * supplyL + service * serviceL) / (supplyL + serviceL);
+      service = supply;
+    }
+    m.supplyAbs[i] = supply;
+    m.serviceAbs[i] = service;
+    m.accessoryAbs[i] = accessory;
+
+    if (m.path[i] !== PATH.off) fillTire(m, i, h, atmosphere);
+    else m.flow[i] = 0;
+    const cooling = m.coolingS[i]!;
+    m.warmth[i] =
+      (m.warmth[i]! * cooling) / (cooling + h) + (m.heating[i]! * m.flow[i]! * h) / m.tireL[i]!;
+    if (bleeding) bleed(m, i, h, atmosphere);
     m.drift[i] = (sourceAbs(m, i) - before) / h;
+    govern(m, i, h, atmosphere);
   }
 }
 
@@ -135,50 +180,6 @@ function sourceL(m: Members, i: number): number {
   return fitting === FITTING.service ? m.serviceL[i]! : m.accessoryL[i]!;
 }
 
-function compress(m: Members, i: number, h: number, atmosphere: number): void {
-  if (m.loaded[i] === 0 || m.speed[i] === SPEED.off || m.deadCompressor[i] === 1) return;
-  const rated = m.speed[i] === SPEED.idle ? m.idleFlow[i]! : m.fastFlow[i]!;
-  const bar = (m.supplyAbs[i]! - atmosphere) / 100;
-  const flow = rated * Math.max(0, 1 - CLEARANCE_PER_BAR * (bar - DELIVERY_AT_BAR));
-  m.supplyAbs[i] = m.supplyAbs[i]! + (flow * 100 * ANR * h) / m.supplyL[i]!;
-}
-
-function leakAndLower(m: Members, i: number, h: number, controls: Controls): void {
-  const atmosphere = controls.atmosphereKpa;
-  const lost = m.leak[i]! * h;
-  let supply = m.supplyAbs[i]! - (m.supplyAbs[i]! - atmosphere) * lost;
-  let service = m.serviceAbs[i]! - (m.serviceAbs[i]! - atmosphere) * lost;
-  m.accessoryAbs[i] = m.accessoryAbs[i]! - (m.accessoryAbs[i]! - atmosphere) * lost;
-  if (controls.pedal) service = Math.max(atmosphere, service - m.pedalKpaS[i]! * h);
-  if (controls.drain) {
-    const out = m.drainC[i]! * supply * ANR * flowShare(atmosphere / supply) * h;
-    supply = Math.max(atmosphere, supply - out / m.supplyL[i]!);
-  }
-  m.supplyAbs[i] = supply;
-  m.serviceAbs[i] = service;
-}
-
-/** Supply feeds service and accessory, never back. Check valves pass far more than a compressor. */
-function passCheckValves(m: Members, i: number, atmosphere: number): void {
-  const supplyL = m.supplyL[i]!;
-  if (m.fitting[i] === FITTING.accessory) {
-    const open = m.supplyAbs[i]! - atmosphere > m.protectionKpa[i]!;
-    if (open && m.supplyAbs[i]! > m.accessoryAbs[i]!) {
-      const accessoryL = m.accessoryL[i]!;
-      const shared =
-        (m.supplyAbs[i]! * supplyL + m.accessoryAbs[i]! * accessoryL) / (supplyL + accessoryL);
-      m.supplyAbs[i] = shared;
-      m.accessoryAbs[i] = shared;
-    }
-  }
-  if (m.supplyAbs[i]! > m.serviceAbs[i]!) {
-    const serviceL = m.serviceL[i]!;
-    const shared = (m.supplyAbs[i]! * supplyL + m.serviceAbs[i]! * serviceL) / (supplyL + serviceL);
-    m.supplyAbs[i] = shared;
-    m.serviceAbs[i] = shared;
-  }
-}
-
 /** Lets air move between the fitting's tank and the tire for h seconds, h above 0. */
 export function fillTire(m: Members, i: number, h: number, atmosphere: number): void {
   const path = m.path[i]!;
@@ -200,8 +201,6 @@ export function fillTire(m: Members, i: number, h: number, atmosphere: number): 
     m.tireAbs[i] = m.tireAbs[i]! + (flow * h) / tireL;
   }
   m.flow[i] = flow;
-  const gained = (flow * h) / tireL;
-  m.warmth[i] = m.warmth[i]! * (1 - h / (m.coolingS[i]! + h)) + m.heating[i]! * gained;
 }
 
 /** Moves what the present flow carries in some seconds (negative: takes it back). */
@@ -223,6 +222,7 @@ function govern(m: Members, i: number, h: number, atmosphere: number): void {
   if (m.loaded[i] === 1 && gauge >= m.cutOutKpa[i]!) {
     m.loaded[i] = 0;
     m.sinceSwitch[i] = 0;
+    m.supplyAbs[i] = m.supplyAbs[i]! - m.purgeKpa[i]!;
   } else if (m.loaded[i] === 0 && gauge <= m.cutInKpa[i]!) {
     m.loaded[i] = 1;
     m.sinceSwitch[i] = 0;

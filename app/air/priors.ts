@@ -30,6 +30,7 @@ export function drawLasting(m: Members, i: number, draws: Draws): void {
   m.wheelBias[i] = normal(draws) * 1.8 * KPA_PER_PSI;
   m.dashBias[i] = normal(draws) * 3.2 * KPA_PER_PSI;
   m.pedalDropsIdle[i] = uniform(draws) < 0.5 ? 1 : 0;
+  m.purgeKpa[i] = uniform(draws) < 0.4 ? uniformBetween(draws, 0.3, 3) * KPA_PER_PSI : 0;
   m.missesPurge[i] = uniform(draws) < 0.75 ? uniformBetween(draws, 0.05, 0.3) : 0.95;
   m.deadCompressor[i] = uniform(draws) < 0.01 ? 1 : 0;
 }
