@@ -6,6 +6,9 @@ import type { EntryContext, HandleErrorFunction, RouterContextProvider } from 'r
 import { isRouteErrorResponse, ServerRouter } from 'react-router';
 import { log } from '~/services/log.server';
 import { nonceContext } from '~/services/security-headers.server';
+import { armShutdown } from '~/services/shutdown.server';
+
+armShutdown();
 
 /** Milliseconds after which a page that has not finished streaming is given up. */
 export const streamTimeout = 10_000;

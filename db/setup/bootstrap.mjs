@@ -84,8 +84,31 @@ function passSignalsOn() {
   };
   for (const signal of ['SIGINT', 'SIGTERM', 'SIGHUP']) process.on(signal, pass);
   // Killed outright, npm takes nobody with it, and its server would stay.
-  const parent = process.ppid;
-  setInterval(() => process.ppid === parent || pass('SIGTERM'), 1000).unref();
+  const npm = npmAbove();
+  if (npm) setInterval(() => isAlive(npm) || pass('SIGTERM'), 1000).unref();
+}
+
+/** npm is our parent, or its shell is; nobody else's end concerns us. */
+function npmAbove() {
+  if (!process.env.npm_lifecycle_event) return undefined;
+  const candidates = [process.ppid, parentOf(process.ppid)];
+  return candidates.find((pid) => readProcess(pid, 'cmdline').startsWith('npm'));
+}
+
+function parentOf(pid) {
+  return Number(/^PPid:\s*(\d+)/m.exec(readProcess(pid, 'status'))?.[1] ?? 0);
+}
+
+function isAlive(pid) {
+  return readProcess(pid, 'cmdline').startsWith('npm');
+}
+
+function readProcess(pid, file) {
+  try {
+    return readFileSync(`/proc/${pid}/${file}`, 'utf8');
+  } catch {
+    return '';
+  }
 }
 
 function stop(words) {

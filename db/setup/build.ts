@@ -47,7 +47,7 @@ export function isBuilt(folder: string): boolean {
 export async function build(folder: string): Promise<void> {
   rmSync(stampOf(folder), { force: true });
   const hash = sourceHash();
-  const code = await runVisibly('npm', ['run', '--silent', 'build'], {
+  const code = await runVisibly('npm', ['run', '--silent', 'build', '--', '--logLevel', 'warn'], {
     ...process.env,
     NODE_ENV: 'production',
     VALVESIDE_BUILD_DIR: folder,

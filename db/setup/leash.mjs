@@ -4,9 +4,15 @@
  */
 import { isMainThread } from 'node:worker_threads';
 
+/** For answers that are under way. */
+const GRACE_MS = 5000;
+
 if (isMainThread) {
   process.stdin.on('error', () => {});
-  process.stdin.on('close', () => process.kill(process.pid, 'SIGTERM'));
+  process.stdin.on('close', () => {
+    process.kill(process.pid, 'SIGTERM');
+    setTimeout(() => process.exit(1), GRACE_MS).unref();
+  });
   process.stdin.resume();
   process.stdin.unref();
 }

@@ -15,7 +15,7 @@ import { build, isBuilt } from './build';
 import { localSettings, type Variables } from './local-settings';
 import { dataFolder, projectRoot } from './paths';
 import { isPortTaken } from './ports';
-import { SetupError } from './run';
+import { SetupError, wait } from './run';
 import { takeStartLock } from './start-lock';
 import { Stopping } from './stopping';
 
@@ -61,7 +61,11 @@ function readListening(): { port: number; host: string } {
 }
 
 async function refuseTakenPort(port: number, host: string): Promise<void> {
-  if (!(await isPortTaken(port, host))) return;
+  // The server of a start that was killed a moment ago is still letting go of it.
+  for (let tries = 0; tries < 15; tries++) {
+    if (!(await isPortTaken(port, host))) return;
+    await wait(200);
+  }
   throw new SetupError(
     `Port ${port} is in use by another program. Choose another: PORT=${port + 1} npm start`,
   );
