@@ -14,6 +14,9 @@ export const mostKpa = 1400;
 /** A fill lasts at most a day. */
 export const longestRunMs = 24 * 3_600_000;
 
+/** End of 2199: a clock that was never set, not a time. */
+const farthest = Date.UTC(2200, 0);
+
 export const version = z.literal(wireVersion, { error: `${wireVersion}, the version of the body` });
 
 /** An id made on the phone. PostgreSQL keeps UUIDs in lower case, so they are compared in it. */
@@ -39,8 +42,13 @@ export const stepKpa = above(0, mostKpa, `a step above 0 and up to ${mostKpa} kP
 
 export const yesNo = z.boolean({ error: 'true or false' });
 
-const momentWords = 'a time in UTC, such as 2026-05-04T09:30:00.000Z';
-export const moment = z.iso.datetime({ error: momentWords });
+const momentWords = 'a time in UTC after 1970, such as 2026-05-04T09:30:00.000Z';
+
+/** A time in UTC, always with milliseconds: what is stored comes back as the same text. */
+export const moment = z.iso
+  .datetime({ error: momentWords })
+  .refine((text) => !(Date.parse(text) < 0 || Date.parse(text) > farthest), { error: momentWords })
+  .overwrite((text) => (Number.isNaN(Date.parse(text)) ? text : new Date(text).toISOString()));
 
 export const text = (least: number, most: number, words: string) =>
   z.string({ error: words }).trim().min(least, { error: words }).max(most, { error: words });

@@ -14,8 +14,10 @@ const statusOf = {
   'not-signed-in': 401,
   'not-allowed': 403,
   'not-found': 404,
+  'wrong-method': 405,
   conflict: 409,
   'too-large': 413,
+  'wrong-type': 415,
   'too-many': 429,
   unavailable: 503,
 } as const;
