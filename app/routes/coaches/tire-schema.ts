@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { estimateTireVolume, parseTireSize, type TireSizeProblem } from '~/loads';
+import { estimateTireVolume, parseTireSize, type TireSizeProblem, wheelPositions } from '~/loads';
 import type { Litres, PressureUnit } from '~/units';
 import type { FormValues } from './form/read-form';
 import { limitField, nameField, volumeField } from './form/typed-fields';
@@ -82,3 +82,21 @@ function spelled(text: string): string {
   const parsed = parseTireSize(text);
   return parsed.ok ? parsed.size.code : text;
 }
+
+const positionField = z.enum(wheelPositions, 'Choose a tire of this coach.');
+
+/** One tire described anew, and whether it is another tire. */
+export const tireChangeSchema = (unit: PressureUnit, values: FormValues) =>
+  z
+    .object({
+      position: positionField,
+      what: z.enum(['corrected', 'replaced'], 'Say what happened.'),
+      ...tireFields(unit, values),
+    })
+    .transform(({ position, what, ...tire }) => ({ position, what, tire: describeTire(tire) }));
+
+/** Two tires that change places. */
+export const moveSchema = z.object({
+  position: positionField,
+  with: z.enum(wheelPositions, 'Choose the place that it goes to.'),
+});

@@ -152,9 +152,3 @@ export const nameField = (what: string, longest: number) =>
     .trim()
     .min(1, `Type ${what}.`)
     .max(longest, `Type ${what} in ${longest} characters or fewer.`);
-
-/** What goes with each unit of pressure: °F and ft with psi, °C and m with kPa and bar. */
-export const placeUnits = (
-  unit: PressureUnit,
-): { temperature: TemperatureUnit; altitude: AltitudeUnit } =>
-  unit === 'psi' ? { temperature: '°F', altitude: 'ft' } : { temperature: '°C', altitude: 'm' };
