@@ -1,11 +1,9 @@
 import type { ReactNode } from 'react';
-import { Link, NavLink } from 'react-router';
+import { Link, NavLink, useRouteLoaderData } from 'react-router';
 import { Mark } from './mark';
 import { ThemeSwitch } from './theme-switch';
 
 export interface PageShellProps {
-  /** Signed in: shows coaches and the account. Absent: the ways in. */
-  viewer?: { email: string };
   /** A `<CoachNav>` below the head, on the pages of one coach. */
   nav?: ReactNode;
   /** Keeps running text to a readable measure. */
@@ -13,8 +11,16 @@ export interface PageShellProps {
   children: ReactNode;
 }
 
-/** The frame of every page but the live screen: mark, ways on, content, foot. */
-export function PageShell({ viewer, nav, narrow = false, children }: PageShellProps) {
+interface RootData {
+  viewer?: { email: string } | null;
+}
+
+/**
+ * The frame of every page but the live screen: mark, ways on, content, foot. Who is signed in
+ * comes from the root's loader, so a page has nothing to pass on.
+ */
+export function PageShell({ nav, narrow = false, children }: PageShellProps) {
+  const viewer = useRouteLoaderData<RootData>('root')?.viewer;
   return (
     <>
       <a className="skip" href="#main">

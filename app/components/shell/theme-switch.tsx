@@ -29,8 +29,7 @@ function chooseTheme(theme: Theme): void {
   if (attribute) root.dataset.theme = attribute;
   else delete root.dataset.theme;
   // The Cookie Store API is missing from phones that are a few years old.
-  const page: Pick<Document, 'cookie'> = document;
-  page.cookie = themeCookieText(theme, location.protocol === 'https:');
+  Reflect.set(document, 'cookie', themeCookieText(theme, location.protocol === 'https:'));
 }
 
 function readRoot(): Theme {

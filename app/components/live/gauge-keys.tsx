@@ -1,0 +1,32 @@
+import { PressKey, type Stamp } from './press-key';
+
+export interface GaugeKeysProps {
+  /** "Gauge at the wheel reads, psi" */
+  label: string;
+  /** What a simulated gauge shows; a real one is read by the person. */
+  shows?: string;
+  values: readonly { key: string; text: string }[];
+  onPick: (index: number, down: Stamp) => void;
+  note?: string;
+}
+
+/** The offered values of a gauge, none emphasised. */
+export function GaugeKeys({ label, shows, values, onPick, note }: GaugeKeysProps) {
+  return (
+    <div className="gauge">
+      <h2 className="gauge-label">
+        <span>{label}</span>
+        {shows && <b className="gauge-shows">{shows}</b>}
+      </h2>
+      <div className="key-row" data-count={values.length}>
+        {values.map((value, index) => (
+          // The place is the key: a value that changes must not move another button under a thumb.
+          <PressKey key={value.key} className="key-value" onPress={(down) => onPick(index, down)}>
+            {value.text}
+          </PressKey>
+        ))}
+      </div>
+      {note && <p className="gauge-note">{note}</p>}
+    </div>
+  );
+}

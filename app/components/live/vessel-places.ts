@@ -1,0 +1,44 @@
+import type { VesselMark, VesselState } from '~/fill/vessel-state';
+
+/** Height of a tag, and of a mark's text, px: what has to stay clear of its neighbour. */
+const tagPx = 32;
+const markPx = 20;
+
+/** Which mark keeps its text where two would overlap. */
+const rank: Record<VesselMark['kind'], number> = { target: 0, limit: 1, 'cut-out': 2, 'cut-in': 3 };
+
+/** The marks whose text finds room, the more telling first. */
+export function placeMarks(marks: readonly VesselMark[], heightPx: number): VesselMark[] {
+  const placed: VesselMark[] = [];
+  for (const mark of [...marks].sort((a, b) => rank[a.kind] - rank[b.kind])) {
+    const px = toPx(mark.height, heightPx);
+    const inside = px >= markPx / 2 && px <= heightPx - markPx / 2;
+    const free = placed.every((other) => Math.abs(toPx(other.height, heightPx) - px) >= markPx);
+    if (inside && free) placed.push(mark);
+  }
+  return placed;
+}
+
+/**
+ * Where the two tags stand, px from the vessel's foot to their middle: the supply's on its level
+ * but clear of the line, the tire's on the other side of the line.
+ */
+export function placeTags(
+  { supply, tire, above }: VesselState,
+  heightPx: number,
+): { supply: number; tire: number } {
+  const line = toPx(tire.height, heightPx);
+  const level = toPx(supply.middle, heightPx);
+  const clear = tagPx / 2 + 5;
+  const supplyAt = above ? Math.max(level, line + clear) : Math.min(level, line - clear);
+  const tireAt = above ? line - clear : line + clear;
+  return { supply: within(supplyAt, heightPx), tire: within(tireAt, heightPx) };
+}
+
+function within(px: number, heightPx: number): number {
+  return Math.min(Math.max(px, tagPx / 2 + 2), Math.max(tagPx / 2, heightPx - tagPx / 2));
+}
+
+function toPx(percent: number, heightPx: number): number {
+  return (percent / 100) * heightPx;
+}
