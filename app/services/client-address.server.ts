@@ -16,11 +16,13 @@ if (!kept.valvesidePeers) {
   });
 }
 
+/** The address at the other end of the connection that is being answered; empty when not known. */
+export const peerAddress = (): string => kept.valvesidePeers?.getStore() ?? '';
+
 /** Where the request came from, as one key for limits: an IPv4 address or an IPv6 /64. */
 export function clientAddress(request: Request): string {
-  const peer = kept.valvesidePeers?.getStore() ?? '';
   const forwarded = request.headers.get('X-Forwarded-For');
-  return limitKey(pickAddress(peer, forwarded, env.TRUSTED_PROXIES));
+  return limitKey(pickAddress(peerAddress(), forwarded, env.TRUSTED_PROXIES));
 }
 
 /**
