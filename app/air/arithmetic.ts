@@ -135,3 +135,13 @@ function tailQuantile(p: number): number {
 export function lognormal(draws: Draws, median: number, spread: number): number {
   return median * exp(spread * normal(draws));
 }
+
+const STANDARD = new Float64Array(1024).map((_, i) => {
+  const p = (i + 0.5) * 0.6180339887498949;
+  return normalQuantile(Math.min(0.999, Math.max(0.001, p - Math.floor(p))));
+});
+
+/** A fixed standard normal value for a place, spread evenly over neighbouring places. */
+export function standardDraw(place: number): number {
+  return STANDARD[place % STANDARD.length]!;
+}

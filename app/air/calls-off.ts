@@ -89,7 +89,8 @@ function choosePlan(s: Situation, goal: Goal): Decision {
   const costLower = lower ? costOf(lower) : Number.POSITIVE_INFINITY;
   if (facts.atSeat && !facts.helper && costNow <= costWait + 1)
     return { call: 'wait', reason: 'not-at-the-wheel' };
-  if (costNow <= costWait + 1 && costNow <= costLower) {
+  const waitIn = evenSpread(wait.change);
+  if ((costNow <= costWait + 1 || waitIn.p50 <= goal.hands.putOn * 0.5) && costNow <= costLower) {
     return { call: 'chuck-on', reason: 'supply-above-tire', changeIn: evenSpread(now.change) };
   }
   if (lower && costLower < costWait - 3) {

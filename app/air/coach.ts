@@ -16,6 +16,7 @@ const STATE_FIELDS = [
   'path', // one of PATH
   'flow', // kPa·L/s into the tire, negative: out of it
   'drift', // kPa/s of the tank that the fitting sits on
+  'doubt', // variance of the supply by what the model leaves out, kPa²
 ] as const;
 
 /** What lasts for a coach, its hose, its gauges. */

@@ -55,11 +55,9 @@ export function takeSupplyReading(e: Ensemble, reading: Reading, rig: FillSetup[
   e.supplySeen = true;
   let mean = 0;
   for (let i = 0; i < m.n; i++) {
-    const late = m.drift[i]! * READ_LAG_S;
-    const distance = reading.kpa - predictedReading(e, i, reading.source) + late;
-    const spread = Math.sqrt(
-      noise * noise + m.drift[i]! * READ_LAG_SPREAD_S * (m.drift[i]! * READ_LAG_SPREAD_S),
-    );
+    const distance = distanceTo(e, i, reading);
+    const lateness = m.drift[i]! * READ_LAG_SPREAD_S;
+    const spread = Math.sqrt(noise * noise + lateness * lateness + m.doubt[i]!);
     let match = (bell(distance, spread) * noise) / spread;
     if (readsTire(e, i, reading, rig)) {
       const tire = m.tireAbs[i]! + m.warmth[i]! - e.controls.atmosphereKpa;
@@ -68,8 +66,32 @@ export function takeSupplyReading(e: Ensemble, reading: Reading, rig: FillSetup[
     scratch[i] = match;
     mean += e.weights[i]! * match;
   }
-  if (mean < SURPRISE) acceptOrDoubt(e, reading, noise);
-  else weigh(e, WRONG_SHARE * noise * 0.01);
+  if (mean < SURPRISE) {
+    acceptOrDoubt(e, reading, noise);
+    return;
+  }
+  correct(e, reading, noise);
+  weigh(e, WRONG_SHARE * noise * 0.01);
+}
+
+function distanceTo(e: Ensemble, i: number, reading: Reading): number {
+  const late = e.members.drift[i]! * READ_LAG_S;
+  return reading.kpa - predictedReading(e, i, reading.source) + late;
+}
+
+/** What the model leaves out is drawn anew from what the reading says about it. */
+function correct(e: Ensemble, reading: Reading, noise: number): void {
+  const m = e.members;
+  for (let i = 0; i < m.n; i++) {
+    const doubt = m.doubt[i]!;
+    if (scratch[i]! < 1e-4 || doubt <= 0) continue;
+    const lateness = m.drift[i]! * READ_LAG_SPREAD_S;
+    const given = noise * noise + lateness * lateness;
+    const gain = doubt / (doubt + given);
+    const left = Math.sqrt(gain * given);
+    e.shiftSupply(i, gain * distanceTo(e, i, reading) + left * normal(e.draws));
+    m.doubt[i] = 0;
+  }
 }
 
 /** A gauge below a closed valve, on a connected chuck, reads the tire. */
@@ -107,6 +129,7 @@ function acceptOrDoubt(e: Ensemble, reading: Reading, noise: number): void {
     }
     const shown = reading.kpa + noise * normal(e.draws);
     e.shiftSupply(i, shown - predictedReading(e, i, reading.source));
+    m.doubt[i] = 0;
     reconcileGovernor(m, i, e.draws, e.controls.atmosphereKpa);
   }
 }

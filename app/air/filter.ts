@@ -20,7 +20,7 @@ import {
 import { startEnsemble } from './profile';
 import { wander } from './renewal';
 
-export const MEMBERS = 320;
+export const MEMBERS = 640;
 /** The grid, s. */
 export const GRID_S = 0.5;
 /** Nobody has tapped for ten minutes: a coarser grid will do until the next event. */

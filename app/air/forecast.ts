@@ -3,12 +3,14 @@
  * to begin; after that every member follows the cycle: on while it gains, off when it does not,
  * bring the supply down where the coach allows it, on again on the rising side.
  */
+
+import { standardDraw } from './arithmetic';
 import { type Controls, createMembers, type Members, PATH, sourceAbs, step } from './coach';
 import type { LowerBy } from './contract';
 import type { Ensemble } from './ensemble';
 import { pickByWeight } from './renewal';
 
-export const ROLLOUT_MEMBERS = 40;
+export const ROLLOUT_MEMBERS = 32;
 const ROLLOUT_STEP_S = 1;
 export const HORIZON_S = 300;
 
@@ -67,6 +69,12 @@ const work = createMembers(ROLLOUT_MEMBERS);
 export function sampleFor(e: Ensemble): Members {
   const sample = createMembers(ROLLOUT_MEMBERS);
   pickByWeight(e.members, e.weights, sample, 0.5);
+  for (let j = 0; j < sample.n; j++) {
+    const shift = Math.sqrt(sample.doubt[j]!) * standardDraw(j);
+    sample.supplyAbs[j] = sample.supplyAbs[j]! + shift;
+    sample.serviceAbs[j] = sample.serviceAbs[j]! + shift;
+    sample.accessoryAbs[j] = sample.accessoryAbs[j]! + shift;
+  }
   return sample;
 }
 

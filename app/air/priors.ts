@@ -27,7 +27,7 @@ export function drawLasting(m: Members, i: number, draws: Draws): void {
   m.hoseC[i] = lognormal(draws, 1.25, 0.4);
   m.chuckC[i] = lognormal(draws, 0.24, 0.55);
   m.gaugeShare[i] = uniformBetween(draws, 0.35, 1);
-  m.wheelBias[i] = normal(draws) * 1.8 * KPA_PER_PSI;
+  m.wheelBias[i] = normal(draws) * 1.5 * KPA_PER_PSI;
   m.dashBias[i] = normal(draws) * 3.2 * KPA_PER_PSI;
   m.pedalDropsIdle[i] = uniform(draws) < 0.5 ? 1 : 0;
   m.purgeKpa[i] = uniform(draws) < 0.4 ? uniformBetween(draws, 0.3, 3) * KPA_PER_PSI : 0;

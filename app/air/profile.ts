@@ -8,10 +8,10 @@ import { createMembers, type Field, LASTING_FIELDS, type Members } from './coach
 import type { FillSetup } from './contract';
 import { Ensemble } from './ensemble';
 import { drawLasting, drawSupply, drawWheel, reconcileGovernor } from './priors';
-import { jitterMember, pickByWeight } from './renewal';
+import { jitterMember, LEAST_WIDTHS, pickByWeight } from './renewal';
 
 export const PROFILE_SCHEMA = 1;
-const KEPT_MEMBERS = 48;
+const KEPT_MEMBERS = 64;
 
 /** Names of what the figures were learned with. */
 export interface RigKey {
@@ -111,7 +111,7 @@ export function startEnsemble(n: number, setup: FillSetup): Ensemble {
     const row = uniform(e.draws);
     if (supply && pick < FROM_SUPPLY) {
       readInto(m, i, supply, Math.floor(row * supply.members.length));
-      jitterMember(m, i, e.draws, 1.2);
+      jitterMember(m, i, e.draws, LEAST_WIDTHS);
     } else if (profile && pick < FROM_PROFILE) {
       takeProfile(e, i, setup, Math.floor(row * profile.members.length));
     }
@@ -151,5 +151,5 @@ function takeProfile(e: Ensemble, i: number, setup: FillSetup, row: number): voi
   if (now.chuck !== profile.key.chuck) m.chuckC[i] = fresh.chuckC;
   if (now.gauge !== profile.key.gauge) m.wheelBias[i] = fresh.wheelBias;
   m.deadCompressor[i] = 0;
-  jitterMember(m, i, e.draws, 1.5);
+  jitterMember(m, i, e.draws, LEAST_WIDTHS);
 }

@@ -57,17 +57,61 @@ export function pickByWeight(
 }
 
 /** Jitter of lasting parameters, so that copies do not stay copies. */
-export function jitterMember(m: Members, i: number, draws: Draws, strength: number): void {
-  for (const field of SCALED) m[field][i] = m[field][i]! * exp(0.03 * strength * normal(draws));
-  const core = exp(0.03 * strength * normal(draws));
+export function jitterMember(m: Members, i: number, draws: Draws, widths: Widths): void {
+  SCALED.forEach((field, k) => {
+    m[field][i] = m[field][i]! * exp(widths.scaled[k]! * normal(draws));
+  });
+  const core = exp(widths.core * normal(draws));
   m.chuckC[i] = m.chuckC[i]! * core;
   m.pathC[i] = m.pathC[i]! * core;
-  m.cutInKpa[i] = m.cutInKpa[i]! + 1.2 * strength * normal(draws);
-  m.cutOutKpa[i] = m.cutOutKpa[i]! + 1.2 * strength * normal(draws);
-  m.wheelBias[i] = m.wheelBias[i]! + 0.6 * strength * normal(draws);
-  m.dashBias[i] = m.dashBias[i]! + 1.2 * strength * normal(draws);
-  const share = m.gaugeShare[i]! + 0.02 * strength * normal(draws);
+  m.cutInKpa[i] = m.cutInKpa[i]! + widths.cutIn * normal(draws);
+  m.cutOutKpa[i] = m.cutOutKpa[i]! + widths.cutOut * normal(draws);
+  m.wheelBias[i] = m.wheelBias[i]! + 0.6 * normal(draws);
+  m.dashBias[i] = m.dashBias[i]! + 1.2 * normal(draws);
+  const share = m.gaugeShare[i]! + 0.02 * normal(draws);
   m.gaugeShare[i] = Math.min(1, Math.max(0.1, share));
+}
+
+/** How far copies are moved apart: relative for what is scaled, kPa for the governor's points. */
+export interface Widths {
+  scaled: number[];
+  core: number;
+  cutIn: number;
+  cutOut: number;
+}
+
+/** The least width, for an ensemble that has become certain. */
+export const LEAST_WIDTHS: Widths = {
+  scaled: SCALED.map(() => 0.03),
+  core: 0.025,
+  cutIn: 1.5,
+  cutOut: 1.5,
+};
+
+/** Share of the ensemble's own spread that copies are moved by. */
+const KERNEL = 0.15;
+
+function deviation(column: Float64Array, relative: boolean): number {
+  let sum = 0;
+  for (let i = 0; i < column.length; i++) sum += column[i]!;
+  const mean = sum / column.length;
+  let squares = 0;
+  for (let i = 0; i < column.length; i++) {
+    squares += (column[i]! - mean) * (column[i]! - mean);
+  }
+  const width = Math.sqrt(squares / column.length);
+  return relative ? width / Math.max(1e-9, Math.abs(mean)) : width;
+}
+
+function widthsOf(m: Members): Widths {
+  return {
+    scaled: SCALED.map((field, k) =>
+      Math.max(LEAST_WIDTHS.scaled[k]!, KERNEL * Math.min(0.6, deviation(m[field], true))),
+    ),
+    core: Math.max(LEAST_WIDTHS.core, KERNEL * Math.min(0.6, deviation(m.pathC, true))),
+    cutIn: Math.max(LEAST_WIDTHS.cutIn, KERNEL * deviation(m.cutInKpa, false)),
+    cutOut: Math.max(LEAST_WIDTHS.cutOut, KERNEL * deviation(m.cutOutKpa, false)),
+  };
 }
 
 const spare = new Map<number, Members>();
@@ -82,8 +126,9 @@ export function resampleIfThin(e: Ensemble): void {
   copy.all.set(e.members.all);
   pickByWeight(copy, e.weights, e.members, uniform(e.draws));
   e.weights.fill(1 / e.members.n);
+  const widths = widthsOf(e.members);
   for (let i = 0; i < e.members.n; i++) {
-    jitterMember(e.members, i, e.draws, 1);
+    jitterMember(e.members, i, e.draws, widths);
     if (uniform(e.draws) < FRESH_SHARE) refreshLasting(e, i);
   }
 }
@@ -105,16 +150,19 @@ export function refreshLasting(e: Ensemble, i: number): void {
   reconcileGovernor(m, i, e.draws, e.controls.atmosphereKpa);
 }
 
+/** What the model leaves out: others draw air, pushes differ. kPa² a second at rest, and by rate. */
+const DOUBT_AT_REST = 0.15;
+const DOUBT_BY_RATE = 0.025;
+
 /** The slow wandering of what is held constant: leaks come and go, other users draw air. */
 export function wander(e: Ensemble, seconds: number): void {
   const m = e.members;
   const root = Math.sqrt(seconds);
   for (let i = 0; i < m.n; i++) {
-    const change = 0.1 * root * normal(e.draws);
-    m.supplyAbs[i] = m.supplyAbs[i]! + change;
-    m.serviceAbs[i] = m.serviceAbs[i]! + change;
-    m.accessoryAbs[i] = m.accessoryAbs[i]! + 0.1 * root * normal(e.draws);
-    m.tireAbs[i] = m.tireAbs[i]! + 0.01 * root * normal(e.draws);
+    const drift = m.drift[i]!;
+    m.doubt[i] = m.doubt[i]! + (DOUBT_AT_REST + DOUBT_BY_RATE * drift * drift) * seconds;
+    m.tireAbs[i] =
+      m.tireAbs[i]! + (0.01 + 0.03 * Math.abs(m.flow[i]! / m.tireL[i]!)) * root * normal(e.draws);
   }
 }
 
