@@ -1,6 +1,7 @@
 import type { Advice, Adviser, FillEvent } from './adviser';
 import { psi } from './flow';
-import type { PerfectResult } from './perfect';
+import { withinTolerance } from './gauges';
+import { type Hands, type PerfectResult, playPerfect } from './perfect';
 import { activeTire, fittingKpa, headroomKpa, settledKpa, tireKpa, type World } from './world';
 
 /** Mean seconds from a call to chuck off, which the adviser knows (design/engine.md). */
@@ -16,13 +17,24 @@ const SETTLE_S = 15;
  * Knows the true pressures, and the plan of the perfect player; acts through the same late hands
  * and asks for the same proof: the floor for any adviser.
  */
-export function newAllSeeing(world: World, best: PerfectResult): Adviser {
-  const mind: Mind = { world, best, readingAt: -1, readingKpa: 0, offAt: -1, wasOn: false };
+export function newAllSeeing(world: World, hands?: Hands): Adviser {
+  const mind: Mind = {
+    world,
+    hands,
+    best: plan(world, hands),
+    readingAt: -1,
+    readingKpa: 0,
+    offAt: -1,
+    wasOn: false,
+  };
   return {
     apply: (event) => hear(mind, event),
     advise: (at) => {
       const on = world.chuck !== 'off';
-      if (mind.wasOn && !on) mind.offAt = at;
+      if (mind.wasOn && !on) {
+        mind.offAt = at;
+        mind.best = plan(world, hands);
+      }
       mind.wasOn = on;
       return { ...decide(mind, at), ...truth(world) };
     },
@@ -31,11 +43,17 @@ export function newAllSeeing(world: World, best: PerfectResult): Adviser {
 
 interface Mind {
   world: World;
+  hands: Hands | undefined;
   best: PerfectResult;
   readingAt: number;
   readingKpa: number;
   offAt: number;
   wasOn: boolean;
+}
+
+/** Made anew whenever the chuck comes off: late hands may have missed what the last one counted on. */
+function plan(world: World, hands?: Hands): PerfectResult {
+  return playPerfect(world, activeTire(world).reachable ? undefined : 0, hands);
 }
 
 type Said = Pick<Advice, 'call' | 'reason' | 'cab' | 'by' | 'readIn'>;
@@ -57,8 +75,8 @@ function truth(world: World) {
 }
 
 function decide(mind: Mind, at: number): Said {
-  const { world, best } = mind;
-  if (!activeTire(world).reachable || best.seconds === Number.POSITIVE_INFINITY) {
+  const { world } = mind;
+  if (!activeTire(world).reachable) {
     return { call: 'cannot-reach', reason: 'governor-too-low' };
   }
   const cab = world.speed === 'idle' && !world.pedal ? 'set-fast-idle' : 'nothing';
@@ -111,7 +129,7 @@ function prove(mind: Mind, at: number): Said {
   }
   const gauged = mind.readingAt >= mind.offAt && mind.readingAt >= 0;
   if (!gauged) return { call: 'gauge-tire', reason: 'prove-it' };
-  if (Math.abs(mind.readingKpa - targetKpa) <= toleranceKpa) {
+  if (withinTolerance(mind.readingKpa, world)) {
     return { call: 'done', reason: 'in-tolerance' };
   }
   if (at - mind.readingAt < SETTLE_S) return { call: 'wait', reason: 'let-it-settle' };

@@ -125,7 +125,7 @@ function drawLowering(dice: Dice, hard: boolean) {
   return {
     brakeKpa: psi(between(dice, 0.7, 3.5)),
     brakeEveryS: between(dice, 1.5, 2.6),
-    drainC: between(dice, 0.5, 2),
+    drainC: between(dice, 0.3, 1),
     losesFastIdle: chance(dice, 0.4),
     // A hard coach without any way to lower its supply would have no perfect player either.
     lowerBy: pick<LowerBy[]>(dice, [
@@ -196,7 +196,7 @@ function drawTires(dice: Dice, air: Air, hard: boolean): WorldTire[] {
   const rear = hard
     ? reachableTarget(dice, air, hard)
     : Math.min(front, reachableTarget(dice, air, hard));
-  const coreC = logBetween(dice, 0.1, 0.5);
+  const coreC = logBetween(dice, 0.1, 0.42);
   const volumeL = between(dice, 70, 210);
   return [front, front, rear, rear].map((targetPsi) =>
     drawTire(dice, air, { hard, targetPsi, coreC, volumeL }),
@@ -248,9 +248,9 @@ export function drawDeficit(
   air: Pick<Coach, 'cutInKpa'>,
   plan: { hard: boolean; targetPsi: number },
 ): number {
-  if (!plan.hard) return between(dice, 3, 16);
+  if (!plan.hard) return between(dice, 3, 15);
   const room = plan.targetPsi - toPsi(air.cutInKpa);
-  return between(dice, 2.5, Math.max(3, Math.min(12, room)));
+  return between(dice, 2.5, Math.max(4, Math.min(10, room)));
 }
 
 /** Conductance from the gauge to the inside of the tire. */

@@ -1,6 +1,7 @@
 import type { Advice, Adviser } from './adviser';
 import { type Alone, newAlone, stepAlone } from './alone';
 import { type Driver, newDriver, stepDriver } from './driver';
+import { withinTolerance } from './gauges';
 import type { Habits } from './habits';
 import { type Helper, listen, newHelper, stepHelper, stopLowering } from './helper';
 import { type FillOutcome, noCoverage, readOutcome } from './outcome';
@@ -144,7 +145,7 @@ function notePhysics(run: Run): void {
   if (settledKpa(world) > limitKpa && tireKpa(world) > targetKpa + toleranceKpa)
     run.overLimit = true;
   const last = run.phone.log[run.phone.log.length - 1];
-  if (last?.type === 'tire-reading' && Math.abs(last.kpa - targetKpa) <= toleranceKpa + 1e-6) {
+  if (last?.type === 'tire-reading' && withinTolerance(last.kpa, world)) {
     run.provenAt = last.at;
   }
 }

@@ -1,6 +1,6 @@
 import type { GaugeTraits } from './coach';
 import { type Dice, normal } from './random';
-import { pressureAbs, tireKpa, type World } from './world';
+import { activeTire, pressureAbs, tireKpa, type World } from './world';
 
 /** What a gauge shows to a person: its own error, then the nearest mark. */
 export function readGauge(gauge: GaugeTraits, trueKpa: number, dice: Dice): number {
@@ -21,4 +21,12 @@ export function readDash(world: World, dice: Dice): number {
 
 export function readTire(world: World, dice: Dice): number {
   return readGauge(world.coach.tireGauge, tireKpa(world), dice);
+}
+
+/** A reading on the very mark of the tolerance counts, whatever the last bit of its kPa says. */
+const LAST_BIT_KPA = 1e-6;
+
+export function withinTolerance(readingKpa: number, world: World): boolean {
+  const { targetKpa, toleranceKpa } = activeTire(world);
+  return Math.abs(readingKpa - targetKpa) <= toleranceKpa + LAST_BIT_KPA;
 }

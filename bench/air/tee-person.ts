@@ -1,6 +1,6 @@
 import type { LowerBy } from './coach';
 import { psi } from './flow';
-import { readTee, readTire } from './gauges';
+import { readTee, readTire, withinTolerance } from './gauges';
 import { type FillOutcome, noCoverage, readOutcome } from './outcome';
 import { around, between, chance, type Dice } from './random';
 import { activeTire, STEP_S, stepWorld, type World } from './world';
@@ -253,8 +253,8 @@ function gauge(person: Person): void {
   if (person.heldFor > 0) learn(person, reading - person.believedKpa);
   person.heldFor = 0;
   person.believedKpa = reading;
-  const { targetKpa, toleranceKpa } = activeTire(world);
-  if (Math.abs(reading - targetKpa) <= toleranceKpa) {
+  const { targetKpa } = activeTire(world);
+  if (withinTolerance(reading, world)) {
     person.done = true;
   } else if (reading > targetKpa) {
     world.bleeding = true;
