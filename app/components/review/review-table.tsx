@@ -28,7 +28,12 @@ function columnsFor(unit: PressureUnit, timeZone: string): Column<TableLine>[] {
     kpa === undefined ? '–' : formatPressure(gaugeKpa(kpa), unit, { withUnit: false });
   return [
     { key: 'at', head: 'Time', figure: true, cell: ({ at }) => sinceStart(at) },
-    { key: 'clock', head: 'Clock', figure: true, cell: ({ clockAt }) => clockTime(clockAt, timeZone) },
+    {
+      key: 'clock',
+      head: 'Clock',
+      figure: true,
+      cell: ({ clockAt }) => clockTime(clockAt, timeZone),
+    },
     { key: 'what', head: 'What happened', rowHead: true, cell: (line) => <What line={line} /> },
     {
       key: 'value',
@@ -36,7 +41,12 @@ function columnsFor(unit: PressureUnit, timeZone: string): Column<TableLine>[] {
       figure: true,
       cell: ({ kpa }) => (kpa === undefined ? '' : figure(kpa)),
     },
-    { key: 'supply', head: `Supply, ${unit}`, figure: true, cell: ({ supply }) => figure(supply?.p50) },
+    {
+      key: 'supply',
+      head: `Supply, ${unit}`,
+      figure: true,
+      cell: ({ supply }) => figure(supply?.p50),
+    },
     { key: 'tire', head: `Tire, ${unit}`, figure: true, cell: ({ tire }) => figure(tire) },
   ];
 }
