@@ -104,7 +104,7 @@ export function startFill(fill: NewFill, phone: Phone = thisPhone()): string {
     deviceId: phone.device.id,
   };
   phone.times.begin(id);
-  putRun(phone.store, { id, coachId, position, ...common, log: [] });
+  putRun(phone.store, { id, coachId, position, ...common, mayEnd: true, log: [] });
   const body: RunBody = versioned({ ...common, setup: common.setup as RunBody['setup'] });
   phone.outbox.add([put('run', id, `runs/${id}`, body, fill.roundId)]);
   return id;

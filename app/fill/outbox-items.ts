@@ -38,6 +38,7 @@ export interface Problem {
   readonly detail: string;
   /** What of it, where the server named it. */
   readonly field?: string;
+  readonly value?: unknown;
   readonly expected?: string;
 }
 

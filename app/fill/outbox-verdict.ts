@@ -42,17 +42,20 @@ function refusal(status: number, body: unknown): Verdict {
   };
   const errors = Array.isArray(told.errors) ? (told.errors as Record<string, unknown>[]) : [];
   const places = new Map<number, Problem>();
-  for (const { index, field, expected } of errors) {
-    if (typeof index !== 'number' || places.has(index)) continue;
-    places.set(index, { ...problem, field: String(field), expected: String(expected) });
+  for (const error of errors) {
+    if (typeof error.index !== 'number' || places.has(error.index)) continue;
+    places.set(error.index, { ...problem, ...namedBy(error) });
   }
   const first = errors[0];
-  const named =
-    first && places.size === 0
-      ? { field: String(first.field), expected: String(first.expected) }
-      : {};
-  return { kind: 'refused', problem: { ...problem, ...named }, places };
+  const whole = first && places.size === 0 ? namedBy(first) : {};
+  return { kind: 'refused', problem: { ...problem, ...whole }, places };
 }
+
+const namedBy = ({ field, value, expected }: Record<string, unknown>) => ({
+  field: String(field),
+  value,
+  expected: String(expected),
+});
 
 /** Longest wait between two attempts, ms. */
 const longestWait = 30_000;

@@ -42,6 +42,8 @@ export interface RunState {
   readonly setup: FillSetup;
   readonly engineVersion: string;
   readonly deviceId: string;
+  /** Whoever holds this phone may end it; a helper only taps. */
+  readonly mayEnd: boolean;
   readonly log: RunLog;
 }
 
