@@ -38,8 +38,9 @@ export function stepAlone(alone: Alone, advice: Advice, now: number): void {
     return;
   }
   const there = otherPlace(alone, advice);
-  if (there === alone.where) alone.wantedSince = now;
-  else if (mayLeave(alone) && now - alone.wantedSince > TAKES.notice(alone.driver.dice)) {
+  if (there === alone.where) alone.wantedSince = Number.POSITIVE_INFINITY;
+  else alone.wantedSince = Math.min(alone.wantedSince, now);
+  if (mayLeave(alone) && now - alone.wantedSince > TAKES.notice(alone.driver.dice)) {
     setOff(alone, there, now);
     return;
   }

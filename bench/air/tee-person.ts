@@ -24,6 +24,8 @@ export interface PersonTraits {
   /** Takes off when the gauge comes this near to where the tire is believed to be. */
   nearPsi: number;
   longestHoldS: number;
+  /** Longest first hold of a tire, whose core nobody knows yet. */
+  longestFirstS: number;
 }
 
 export const PLAIN: PersonTraits = {
@@ -35,6 +37,7 @@ export const PLAIN: PersonTraits = {
   restingPsi: 6,
   nearPsi: 1.5,
   longestHoldS: 120,
+  longestFirstS: 40,
 };
 
 export const EXPERT: PersonTraits = {
@@ -46,6 +49,7 @@ export const EXPERT: PersonTraits = {
   restingPsi: 4,
   nearPsi: 0,
   longestHoldS: 240,
+  longestFirstS: 60,
 };
 
 /** What a person takes along from tire to tire. */
@@ -69,6 +73,8 @@ interface Person {
   heldFor: number;
   /** Pump-downs since air last went in: patience makes people settle for less headroom. */
   tries: number;
+  /** The compressor was heard to load: no pedal again before this. */
+  trustsUntil: number;
   headroomAtStart: number;
   lookedAt: number;
   tee: number;
@@ -86,6 +92,10 @@ const LONGEST_S = 3600;
 /** A glance at the gauge, and the time over which a movement is seen, s. */
 const GLANCE_S = 0.5;
 const MOVEMENT_S = 4;
+/** After the compressor has loaded nobody pumps again sooner than this, s. */
+const TRUSTS_LOADING_S = 15;
+/** No hiss from a chuck: noticed about this soon, s. */
+const NOTICES_SILENCE_S = 10;
 /** The least gain that a person takes for one, kPa. */
 const SEEN_GAIN_KPA = psi(0.3);
 /** How fast people believe that a pin in the core bleeds, kPa/s. */
@@ -143,6 +153,7 @@ function newPerson(world: World, traits: PersonTraits, memory: PersonMemory, dic
     heldFrom: 0,
     heldFor: 0,
     tries: 0,
+    trustsUntil: 0,
     headroomAtStart: 0,
     lookedAt: 0,
     tee: readTee(world, dice),
@@ -168,7 +179,8 @@ function look(person: Person): void {
   person.lookedAt = person.elapsed;
   person.tee = readTee(person.world, person.dice);
   if (person.elapsed - person.before.at < MOVEMENT_S) return;
-  person.rising = person.tee > person.before.kpa + psi(0.5);
+  const seen = Math.max(psi(0.7), 0.6 * person.world.coach.tee.stepKpa);
+  person.rising = person.tee > person.before.kpa + seen;
   person.before = { at: person.elapsed, kpa: person.tee };
 }
 
@@ -209,7 +221,8 @@ function watch(person: Person): void {
   const over = person.tee - person.believedKpa;
   const wanted = psi((person.rising ? traits.risingPsi : traits.restingPsi) - person.tries);
   if (over >= wanted) begin(person, 'on', between(dice, 1.5, 3.5));
-  else if (!person.rising && person.by) begin(person, 'lower', between(dice, 2, 5));
+  else if (!person.rising && person.by && person.elapsed > person.trustsUntil)
+    begin(person, 'lower', between(dice, 2, 5));
 }
 
 function putOn(person: Person): void {
@@ -222,7 +235,8 @@ function putOn(person: Person): void {
   const needs = activeTire(world).targetKpa - person.believedKpa;
   const rate = memory.rateKpaPerS * Math.sqrt(traits.learns ? scale(person) : 1);
   const seconds = (traits.boldness * needs) / rate;
-  begin(person, 'hold', Math.min(traits.longestHoldS, Math.max(3, seconds)));
+  const longest = person.putOn > 1 ? traits.longestHoldS : traits.longestFirstS;
+  begin(person, 'hold', Math.min(longest, Math.max(3, seconds)));
 }
 
 /** An expert knows that a small difference fills slowly: rates are kept for 12 psi of headroom. */
@@ -231,12 +245,10 @@ function scale(person: Person): number {
 }
 
 function hold(person: Person): void {
-  const { memory, traits, dice } = person;
+  const { world, memory, traits, dice } = person;
   const held = person.elapsed - person.heldFrom;
-  const now = Math.min(
-    activeTire(person.world).targetKpa,
-    person.believedKpa + held * memory.rateKpaPerS,
-  );
+  if (world.chuck === 'blocked' && chance(dice, STEP_S / NOTICES_SILENCE_S)) world.chuck = 'open';
+  const now = Math.min(activeTire(world).targetKpa, person.believedKpa + held * memory.rateKpaPerS);
   const near = held > 3 && person.tee < now + psi(traits.nearPsi) && !person.rising;
   if (near || person.elapsed >= person.until) begin(person, 'off', between(dice, 0.8, 2));
 }
@@ -269,10 +281,7 @@ function gauge(person: Person): void {
 
 function learn(person: Person, gainKpa: number): void {
   const { memory, traits } = person;
-  if (gainKpa < SEEN_GAIN_KPA) {
-    memory.rateKpaPerS /= 1.5;
-    return;
-  }
+  if (gainKpa < SEEN_GAIN_KPA) return;
   const seen = gainKpa / person.heldFor / Math.sqrt(traits.learns ? scale(person) : 1);
   memory.rateKpaPerS = traits.learns ? 0.3 * memory.rateKpaPerS + 0.7 * seen : seen;
 }
@@ -289,6 +298,7 @@ function stopLowering(person: Person): void {
   person.world.pedal = false;
   person.world.drain = false;
   person.tries += 1;
+  person.trustsUntil = person.elapsed + TRUSTS_LOADING_S;
   begin(person, 'watch', 0);
 }
 
