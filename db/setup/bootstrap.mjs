@@ -54,7 +54,7 @@ function readJson(file) {
 async function install() {
   console.log('Installing npm packages …');
   // The build tools are development packages, which NODE_ENV=production would leave out.
-  const code = await run('npm', ['ci', '--include=dev', '--no-audit', '--no-fund'], 'ignore');
+  const code = await run('npm', ['ci', '--include=dev', '--loglevel=error'], 'ignore');
   if (code !== 0) stop('npm could not install the packages; its words stand above.');
 }
 

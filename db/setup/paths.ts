@@ -1,12 +1,15 @@
 import { mkdirSync } from 'node:fs';
-import { dirname, join } from 'node:path';
+import { dirname, join, resolve } from 'node:path';
 import { fileURLToPath } from 'node:url';
 
 /** The project's own folder. */
 export const projectRoot = dirname(dirname(dirname(fileURLToPath(import.meta.url))));
 
-/** What a start keeps between runs: cluster, mail, secret. Tests never look at it. */
-export const dataFolder = join(projectRoot, '.data');
+/**
+ * What a start keeps between runs: cluster, mail, secret. Tests never look at it; those that test
+ * the start itself name another folder.
+ */
+export const dataFolder = resolve(projectRoot, process.env.VALVESIDE_DATA_DIR || '.data');
 
 /** What test runs make and remove again. */
 export const testDataFolder = join(projectRoot, '.test-data');

@@ -1,4 +1,3 @@
-import { existsSync } from 'node:fs';
 import { join } from 'node:path';
 import { projectRoot } from './paths';
 import { runVisibly, SetupError } from './run';
@@ -9,7 +8,6 @@ import { runVisibly, SetupError } from './run';
  * @param env every variable that the app reads
  */
 export async function seed(env: Readonly<Record<string, string | undefined>>): Promise<void> {
-  if (!existsSync(join(projectRoot, 'db', 'seed', 'index.ts'))) return;
   const script = join(projectRoot, 'db', 'setup', 'seed-process.ts');
   const code = await runVisibly(process.execPath, ['--import', 'tsx', script], { ...env });
   if (code !== 0) throw new SetupError('The demo could not be filled in; its words stand above.');

@@ -2,7 +2,7 @@ import { createHash } from 'node:crypto';
 import { connect, createServer } from 'node:net';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
-import { projectRoot } from './paths';
+import { dataFolder } from './paths';
 import { SetupError } from './run';
 
 export interface Holder {
@@ -11,14 +11,14 @@ export interface Holder {
 }
 
 /**
- * Lets one start a clone run at a time. The lock is a local socket: the kernel gives it to one
+ * Lets one start use a data folder at a time. The lock is a local socket: the kernel gives it to one
  * process and takes it back when that ends, however it ends, so it can never be stale; and the
  * holder can be asked where it serves.
  * @returns how to let go of it
  * @throws {SetupError} naming the start that holds it
  */
-export async function takeStartLock(holder: Holder, root = projectRoot): Promise<() => void> {
-  const address = lockAddress(root);
+export async function takeStartLock(holder: Holder, folder = dataFolder): Promise<() => void> {
+  const address = lockAddress(folder);
   const server = createServer((socket) => {
     socket.on('error', () => {});
     socket.end(JSON.stringify(holder));
@@ -37,8 +37,8 @@ export async function takeStartLock(holder: Holder, root = projectRoot): Promise
   );
 }
 
-function lockAddress(root: string): string {
-  const name = `valveside-${createHash('sha256').update(root).digest('hex').slice(0, 24)}`;
+function lockAddress(folder: string): string {
+  const name = `valveside-${createHash('sha256').update(folder).digest('hex').slice(0, 24)}`;
   // Linux has sockets without a file; elsewhere the file may need removing after a kill.
   return process.platform === 'linux' ? `\0${name}` : join(tmpdir(), `${name}.sock`);
 }

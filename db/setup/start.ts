@@ -6,7 +6,7 @@
  * a missing setting stops the start and is named.
  */
 import { existsSync, rmSync } from 'node:fs';
-import { join } from 'node:path';
+import { join, relative, resolve } from 'node:path';
 import { EnvError, parseEnv } from '../../app/env.server';
 import { migrate } from '../migrate';
 import { demoPeople } from '../seed/demo-coaches';
@@ -37,6 +37,7 @@ async function start(dev: boolean): Promise<void> {
   const file = join(projectRoot, '.env');
   if (existsSync(file)) process.loadEnvFile(file);
   const production = !dev && process.env.NODE_ENV === 'production';
+  if (production) parseEnv(process.env);
   const { port, host } = readListening();
   const url = `http://${host === '127.0.0.1' ? 'localhost' : host}:${port}`;
   await takeStartLock({ pid: process.pid, url });
@@ -46,7 +47,8 @@ async function start(dev: boolean): Promise<void> {
   const { DATABASE_URL, PUBLIC_URL } = parseEnv(env);
   await migrate(DATABASE_URL);
   const server = await serve({ dev, production, port, host, env });
-  announce(PUBLIC_URL.origin, production);
+  if (production) console.log(`Valveside is ready: ${PUBLIC_URL.origin}`);
+  else announce(PUBLIC_URL.origin);
   const code = await server.ended;
   await stopping.exit(code || 1, `The server ended by itself, with code ${code}.`);
 }
@@ -80,7 +82,7 @@ interface Serving {
 }
 
 async function serve({ dev, production, port, host, env }: Serving): Promise<AppServer> {
-  const folder = join(projectRoot, 'build');
+  const folder = resolve(projectRoot, process.env.VALVESIDE_BUILD_DIR || 'build');
   if (!dev && !isBuilt(folder)) {
     console.log('Building …');
     await build(folder);
@@ -102,13 +104,16 @@ function freshLog(): string {
   return SERVER_LOG;
 }
 
-function announce(url: string, production: boolean): void {
-  console.log(`\nValveside is ready: ${url}`);
-  if (production) return;
+function announce(url: string): void {
+  const demo = process.env.DATABASE_URL ? 'yourself' : `${demoPeople.owner.email}, or as yourself`;
+  const mail = process.env.SMTP_URL
+    ? 'the code comes by mail'
+    : `the code appears here and in ${relative(projectRoot, dataFolder)}/mail/`;
   console.log(
     [
+      `\nValveside is ready: ${url}`,
       `  Practice, with no account: ${url}/practice`,
-      `  Sign in as ${demoPeople.owner.email}, or as yourself: the code appears here and in .data/mail/`,
+      `  Sign in as ${demo}: ${mail}`,
       '  Ctrl-C stops everything.',
     ].join('\n'),
   );

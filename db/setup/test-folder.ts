@@ -19,9 +19,9 @@ export async function makeTestFolder(): Promise<string> {
   return folder;
 }
 
-/** Removes a run's folder, and its cluster where that had to go elsewhere. */
-export async function removeTestFolder(folder: string): Promise<void> {
-  const cluster = await clusterFolder(folder, 'cluster', postgresRunner());
+/** Removes a run's folder, and its cluster (called `name`) where that had to go elsewhere. */
+export async function removeTestFolder(folder: string, name = 'cluster'): Promise<void> {
+  const cluster = await clusterFolder(folder, name, postgresRunner());
   await endServer(cluster);
   rmSync(cluster, { recursive: true, force: true });
   rmSync(folder, { recursive: true, force: true });

@@ -25,11 +25,11 @@ export const parts = {
   typecheck: () => script('typecheck'),
   lint: () => script('lint'),
   unit: (run) => vitest('unit', run),
-  integration: (run) => vitest('integration', run),
   build: async () => {
     await testBuild();
     return { passed: 1, failed: 0 };
   },
+  integration: (run) => vitest('integration', run),
   e2e: playwright,
 } satisfies Record<string, Part>;
 
