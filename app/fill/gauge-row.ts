@@ -11,6 +11,8 @@ export interface GaugeRow {
   before: readonly number[] | undefined;
   /** How many readings in a row were the middle value. */
   middles: number;
+  /** A reading was tapped: the next forecast, which knows of it, offers anew. */
+  tapped: boolean;
 }
 
 export interface RowWish {
@@ -33,12 +35,15 @@ export function offerRow({ forecast, gaugeStepKpa, count }: RowWish, middles = 0
   const lowest = middle - Math.floor((count - 1) / 2) * stepKpa;
   const first = Math.max(0, lowest);
   const values = Array.from({ length: count }, (_, index) => first + index * stepKpa);
-  return { values, stepKpa, changedAt: undefined, before: undefined, middles };
+  return { values, stepKpa, changedAt: undefined, before: undefined, middles, tapped: false };
 }
+
+/** Wider steps than this would be guesses and not readings (our choice). */
+const mostSteps = 5;
 
 function spacing({ p10, p90 }: Spread, gaugeStepKpa: number, count: number): number {
   const steps = Math.round((p90 - p10) / (count + 0.6) / gaugeStepKpa);
-  return Math.max(1, steps) * gaugeStepKpa;
+  return Math.min(mostSteps, Math.max(1, steps)) * gaugeStepKpa;
 }
 
 /** Offers anew only when the forecast has left the values and no thumb is down. */
@@ -47,6 +52,7 @@ export function followForecast(
   wish: RowWish,
   { now, pressing }: { now: number; pressing: boolean },
 ): GaugeRow {
+  if (row.tapped) return offerRow(wish, row.middles);
   const resized = row.values.length !== wish.count;
   if (pressing || !(resized || hasLeft(row, wish.forecast.p50))) return row;
   return { ...offerRow(wish, row.middles), changedAt: now, before: row.values };
@@ -69,9 +75,9 @@ export function valueBefore(row: GaugeRow, index: number, pressedAt: number): nu
 }
 
 /** After a tap the values may move: that is what the thumb expects. `index` −1 is a typed value. */
-export function afterReading(row: GaugeRow, index: number, wish: RowWish): GaugeRow {
+export function afterReading(row: GaugeRow, index: number): GaugeRow {
   const isMiddle = row.values.length === 3 && index === 1;
-  return offerRow(wish, isMiddle ? row.middles + 1 : 0);
+  return { ...row, tapped: true, middles: isMiddle ? row.middles + 1 : 0 };
 }
 
 /** True when the next prompt should open the keypad blank instead of the row. */

@@ -5,6 +5,8 @@ import type { LogFacts } from './log-facts';
 /** One line above the gauge row: a task in the cab, or the caution that applies now. */
 export interface Notice {
   text: string;
+  /** A line for newcomers and no caution. */
+  isHint?: boolean;
   /** A key that says it is done. */
   done?: { label: string; event: NewFillEvent } | { label: string; opens: 'dash-gauge' };
 }

@@ -60,13 +60,7 @@ export interface RowFrame {
 
 export type UiAction =
   | { type: 'advised'; advice: Advice; at: number; now: number; pressing: boolean; frame: RowFrame }
-  | {
-      type: 'recorded';
-      entered: Entered;
-      index: number | undefined;
-      advice: Advice;
-      frame: RowFrame;
-    }
+  | { type: 'recorded'; entered: Entered; index: number | undefined }
   | { type: 'said'; entered: Entered }
   | { type: 'taken-back' }
   | { type: 'open-keypad'; reads: KeypadFor }
@@ -87,7 +81,7 @@ export function nextUi(ui: ScreenUi, action: UiAction): ScreenUi {
         ...ui,
         ...closed,
         entered: action.entered,
-        row: rowAfter(ui, action),
+        row: rowAfter(ui, action.index),
       };
     case 'said':
       return { ...ui, ...closed, entered: action.entered };
@@ -144,10 +138,8 @@ function keypadFor(ui: ScreenUi, row: GaugeRow, advice: Advice, pressing: boolea
   return { reads: 'wheel-gauge' as const, text: '', problem: undefined };
 }
 
-function rowAfter(ui: ScreenUi, action: UiAction & { type: 'recorded' }) {
-  if (!ui.row || action.index === undefined) return ui.row;
-  const wish = { forecast: action.advice.supplyKpa, ...action.frame };
-  return afterReading(ui.row, action.index, wish);
+function rowAfter({ row }: ScreenUi, index: number | undefined) {
+  return row && index !== undefined ? afterReading(row, index) : row;
 }
 
 function typed(ui: ScreenUi, text: string): ScreenUi {

@@ -25,8 +25,8 @@ export function CallPanel({ state }: { state: ScreenState }) {
 
 function Time({ time, wide }: { time: TimeText; wide: boolean }) {
   return (
-    <p className="call-figure" data-wide={wide || undefined} data-long={time.before || undefined}>
-      {time.before && <small>{time.before} </small>}
+    <p className="call-figure" data-wide={wide || undefined}>
+      {time.before && <small className="call-about">{time.before} </small>}
       {time.figure}
       {time.after && <small> {time.after}</small>}
     </p>

@@ -1,23 +1,32 @@
 import { PressKey, type Stamp } from './press-key';
 
-export interface GaugeKeysProps {
+export interface GaugeLabelProps {
   /** "Gauge at the wheel reads, psi" */
   label: string;
   /** What a simulated gauge shows; a real one is read by the person. */
   shows?: string;
+}
+
+/** What the row of values stands for. */
+export function GaugeLabel({ label, shows }: GaugeLabelProps) {
+  return (
+    <h2 className="gauge-label">
+      <span>{label}</span>
+      {shows && <b className="gauge-shows">{shows}</b>}
+    </h2>
+  );
+}
+
+export interface GaugeKeysProps {
   values: readonly { key: string; text: string }[];
   onPick: (index: number, down: Stamp) => void;
   note?: string;
 }
 
 /** The offered values of a gauge, none emphasised. */
-export function GaugeKeys({ label, shows, values, onPick, note }: GaugeKeysProps) {
+export function GaugeKeys({ values, onPick, note }: GaugeKeysProps) {
   return (
     <div className="gauge">
-      <h2 className="gauge-label">
-        <span>{label}</span>
-        {shows && <b className="gauge-shows">{shows}</b>}
-      </h2>
       <div className="key-row" data-count={values.length}>
         {values.map((value, index) => (
           // The place is the key: a value that changes must not move another button under a thumb.

@@ -28,7 +28,7 @@ export function Keypad(props: KeypadProps) {
     <div className="keypad">
       <div className="keypad-entry" data-wrong={problem ? true : undefined}>
         <label htmlFor={id}>
-          {label}
+          <span>{label}</span>
           {shows && <b className="gauge-shows">{shows}</b>}
         </label>
         <input
@@ -64,13 +64,7 @@ export function Keypad(props: KeypadProps) {
             {digit}
           </PressKey>
         ))}
-        <PressKey
-          className="key-value"
-          aria-label="Erase"
-          onPress={() => onText(text.slice(0, -1))}
-        >
-          ⌫
-        </PressKey>
+        <PressKey onPress={() => onText(text.slice(0, -1))}>Erase</PressKey>
       </div>
       {props.children}
     </div>

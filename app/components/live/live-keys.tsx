@@ -3,7 +3,7 @@ import { moreGroups } from '~/fill/more-keys';
 import type { ScreenState } from '~/fill/screen-state';
 import type { KeypadFor } from '~/fill/screen-ui';
 import { formatPressure, gaugeKpa, type PressureUnit } from '~/units';
-import { GaugeKeys } from './gauge-keys';
+import { GaugeKeys, GaugeLabel } from './gauge-keys';
 import { Keypad } from './keypad';
 import type { LiveScreenProps } from './live-props';
 import { MoreSheet } from './more-sheet';
@@ -44,13 +44,20 @@ export function LiveKeys(props: KeysProps) {
   );
 }
 
-function Strip({ ui, state, handlers, clock, last, hint }: KeysProps) {
-  const first = hint && !last ? { text: hint } : undefined;
+function Strip(props: KeysProps) {
+  const { ui, state, handlers, clock, last, hint, setup, unit, shows } = props;
+  const first = hint && !last && !state.notice?.done ? { text: hint, isHint: true } : undefined;
   const entered = ui.entered && ui.entered.until > clock ? ui.entered : undefined;
   return (
     <NoticeStrip
       entered={entered}
       notice={ui.keypad ? undefined : (first ?? state.notice)}
+      label={
+        !ui.keypad &&
+        state.body !== 'pedal-cautions' && (
+          <GaugeLabel label={labelOf(hoseGauge(setup), unit)} shows={shows?.hose} />
+        )
+      }
       onTakeBack={handlers.takeBack}
       onDone={(event, down) => handlers.record(event, down.at)}
       onDash={() => handlers.openKeypad('dash-gauge')}
@@ -58,7 +65,7 @@ function Strip({ ui, state, handlers, clock, last, hint }: KeysProps) {
   );
 }
 
-function OfferedGauge({ ui, state, handlers, setup, unit, shows }: KeysProps) {
+function OfferedGauge({ ui, state, handlers, setup, unit }: KeysProps) {
   const reads = hoseGauge(setup);
   const values = (ui.row?.values ?? []).map((kpa, index) => ({
     key: String(index),
@@ -68,8 +75,6 @@ function OfferedGauge({ ui, state, handlers, setup, unit, shows }: KeysProps) {
     <>
       {state.body !== 'pedal-cautions' && (
         <GaugeKeys
-          label={`${gaugeNames[reads]} reads, ${unit}`}
-          shows={shows?.hose}
           values={values}
           onPick={handlers.pickOffered}
           note={state.airMoves ? 'The gauge reads lower while air moves.' : undefined}

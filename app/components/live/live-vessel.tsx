@@ -1,6 +1,6 @@
 import { type CSSProperties, useLayoutEffect, useRef, useState } from 'react';
 import type { VesselState } from '~/fill/vessel-state';
-import { placeMarks, placeTags } from './vessel-places';
+import { placeMarks, placeTags, vesselSize } from './vessel-places';
 
 /** The level and the line: supply, tire, target, cut-in and cut-out, readable without a number. */
 export function LiveVessel({ vessel, bare = false }: { vessel: VesselState; bare?: boolean }) {
@@ -13,8 +13,9 @@ export function LiveVessel({ vessel, bare = false }: { vessel: VesselState; bare
     '--tire': `${tire.height}%`,
   } as CSSProperties;
   const tags = placeTags(vessel, heightPx);
+  const size = bare ? 'bare' : vesselSize(heightPx);
   return (
-    <div className="vessel" style={places} ref={box} aria-hidden="true">
+    <div className="vessel" data-size={size} style={places} ref={box} aria-hidden="true">
       <div className="vessel-level" />
       {above ? <div className="vessel-head" /> : <div className="vessel-lack" />}
       {vessel.marks.map((mark) => (
@@ -25,13 +26,13 @@ export function LiveVessel({ vessel, bare = false }: { vessel: VesselState; bare
         />
       ))}
       <div className="vessel-line" />
-      {!bare &&
+      {size !== 'bare' &&
         placeMarks(vessel.marks, heightPx).map((mark) => (
           <span key={mark.kind} className="vessel-mark-text" style={{ bottom: `${mark.height}%` }}>
             {mark.text}
           </span>
         ))}
-      {!bare && (
+      {size !== 'bare' && (
         <>
           <span className="vessel-tag vessel-tag-supply" style={{ bottom: `${tags.supply}px` }}>
             <small>Supply</small>

@@ -39,7 +39,7 @@ export function makeHandlers(f: Frame): LiveHandlers {
     const entered = { id, text: f.words(event), until: until() };
     const isRow = event.type === 'supply-reading' && event.source === hoseGauge(setup);
     const place = isRow ? (index ?? -1) : undefined;
-    dispatch({ type: 'recorded', entered, index: place, advice, frame });
+    dispatch({ type: 'recorded', entered, index: place });
   };
   const askFirst = (event: NewFillEvent, at: number) => {
     const needsReading = event.type === 'lowering' && event.by === 'pedal' && event.on;

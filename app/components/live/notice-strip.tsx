@@ -1,3 +1,4 @@
+import type { ReactNode } from 'react';
 import type { NewFillEvent } from '~/fill/live-driver';
 import type { Notice } from '~/fill/notice';
 import type { Entered } from '~/fill/screen-ui';
@@ -6,32 +7,42 @@ import { PressKey, type Stamp } from './press-key';
 export interface NoticeStripProps {
   entered: Entered | undefined;
   notice: Notice | undefined;
+  /** The label of the gauge row: it stands in the same strip, so that the keys never move. */
+  label: ReactNode;
   onTakeBack: (id: string) => void;
   onDone: (event: NewFillEvent, down: Stamp) => void;
   onDash: () => void;
 }
 
-/** The line above the gauge row: what was just entered, a task in the cab, or a caution. */
-export function NoticeStrip({ entered, notice, onTakeBack, onDone, onDash }: NoticeStripProps) {
-  if (entered) {
-    const { id, text } = entered;
-    return (
-      <div className="notice" data-kind="entered">
-        <p>{text}</p>
-        {id && <PressKey onPress={() => onTakeBack(id)}>Take back</PressKey>}
-      </div>
-    );
-  }
-  if (!notice) return null;
-  const { text, done } = notice;
+/** The strip above the gauge row: what was just entered, a task in the cab, or a caution. */
+export function NoticeStrip(props: NoticeStripProps) {
+  const { entered, notice, label } = props;
+  const kind = entered ? 'entered' : kindOf(notice);
   return (
-    <div className="notice" data-kind={done ? 'task' : 'caution'}>
-      <p>{text}</p>
-      {done && (
-        <PressKey onPress={(down) => ('event' in done ? onDone(done.event, down) : onDash())}>
-          {done.label}
-        </PressKey>
-      )}
+    <div className="notice" data-kind={kind}>
+      <div className="notice-words">
+        {(entered || notice) && <p>{entered?.text ?? notice?.text}</p>}
+        {label}
+      </div>
+      <StripKey {...props} />
     </div>
+  );
+}
+
+function kindOf(notice: Notice | undefined) {
+  if (!notice) return 'none';
+  if (notice.done) return 'task';
+  return notice.isHint ? 'hint' : 'caution';
+}
+
+function StripKey({ entered, notice, onTakeBack, onDone, onDash }: NoticeStripProps) {
+  const id = entered?.id;
+  if (id) return <PressKey onPress={() => onTakeBack(id)}>Take back</PressKey>;
+  const done = entered ? undefined : notice?.done;
+  if (!done) return null;
+  return (
+    <PressKey onPress={(down) => ('event' in done ? onDone(done.event, down) : onDash())}>
+      {done.label}
+    </PressKey>
   );
 }

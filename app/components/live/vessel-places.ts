@@ -1,8 +1,21 @@
 import type { VesselMark, VesselState } from '~/fill/vessel-state';
 
-/** Height of a tag, and of a mark's text, px: what has to stay clear of its neighbour. */
-const tagPx = 32;
+/** Height of a tag, of one in a low vessel, and of a mark's text, px: what has to stay clear. */
+const usualTagPx = 32;
+const lowTagPx = 24;
 const markPx = 20;
+
+/** Below these heights of a vessel its tags are small, or there is no room for any, px. */
+const lowPx = 130;
+const barePx = 64;
+
+export type VesselSize = 'usual' | 'low' | 'bare';
+
+/** How much writing a vessel of that height can hold. */
+export function vesselSize(heightPx: number): VesselSize {
+  if (heightPx < barePx) return 'bare';
+  return heightPx < lowPx ? 'low' : 'usual';
+}
 
 /** Which mark keeps its text where two would overlap. */
 const rank: Record<VesselMark['kind'], number> = { target: 0, limit: 1, 'cut-out': 2, 'cut-in': 3 };
@@ -29,13 +42,14 @@ export function placeTags(
 ): { supply: number; tire: number } {
   const line = toPx(tire.height, heightPx);
   const level = toPx(supply.middle, heightPx);
-  const clear = tagPx / 2 + 5;
+  const tagPx = vesselSize(heightPx) === 'low' ? lowTagPx : usualTagPx;
+  const clear = tagPx / 2 + 6;
   const supplyAt = above ? Math.max(level, line + clear) : Math.min(level, line - clear);
   const tireAt = above ? line - clear : line + clear;
-  return { supply: within(supplyAt, heightPx), tire: within(tireAt, heightPx) };
+  return { supply: within(supplyAt, heightPx, tagPx), tire: within(tireAt, heightPx, tagPx) };
 }
 
-function within(px: number, heightPx: number): number {
+function within(px: number, heightPx: number, tagPx: number): number {
   return Math.min(Math.max(px, tagPx / 2 + 2), Math.max(tagPx / 2, heightPx - tagPx / 2));
 }
 
