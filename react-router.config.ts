@@ -1,4 +1,6 @@
+import { join } from 'node:path';
 import type { Config } from '@react-router/dev/config';
+import { build } from 'vite';
 
 export default {
   ssr: true,
@@ -9,6 +11,7 @@ export default {
   // The framework compares Origin with the address that the server sees, which is another one behind
   // a TLS proxy. `same-origin.server.ts` goes by the public address instead, for every route.
   allowedActionOrigins: ['**'],
+  buildEnd: ({ reactRouterConfig }) => buildReplayWorker(reactRouterConfig.buildDirectory),
   future: {
     v8_middleware: true,
     v8_splitRouteModules: true,
@@ -17,3 +20,19 @@ export default {
     v8_passThroughRequests: true,
   },
 } satisfies Config;
+
+/** The replay pool's thread is a program of its own, put beside the server's. */
+async function buildReplayWorker(buildDirectory: string): Promise<void> {
+  await build({
+    configFile: false,
+    logLevel: 'warn',
+    resolve: { tsconfigPaths: true },
+    build: {
+      ssr: 'app/services/replay-worker.server.ts',
+      outDir: join(buildDirectory, 'server'),
+      emptyOutDir: false,
+      copyPublicDir: false,
+      rollupOptions: { output: { entryFileNames: 'replay-worker.js' } },
+    },
+  });
+}

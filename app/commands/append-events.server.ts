@@ -6,7 +6,7 @@ import { sequelize } from '~/models/database.server';
 import type { Run } from '~/models/run.server';
 import { requireRun } from '~/queries/round-access.server';
 import { Refusal } from '~/services/refusal.server';
-import { publishLog } from '~/services/run-notices.server';
+import { queueResult } from './compute-result.server';
 import { markOverlaps } from './mark-overlaps.server';
 import { insertEvents, type StoredRow, storedEvents } from './run-event-rows.server';
 import { differences } from './same-body.server';
@@ -39,7 +39,7 @@ export async function appendEvents(
     return { stored: numbersOf(body, known, rows), lastSeq, endedSeq, added: rows.length };
   });
   const { added, ...answer } = outcome;
-  if (added > 0) publishLog({ runId, lastSeq: answer.lastSeq, ended: answer.endedSeq !== null });
+  if (added > 0 && answer.endedSeq !== null) queueResult(runId);
   return answer;
 }
 

@@ -1,4 +1,5 @@
 import { QueryTypes, type Transaction } from 'sequelize';
+import { AirProfileRow } from '~/models/air-profile.server';
 import { sequelize } from '~/models/database.server';
 import type { Run } from '~/models/run.server';
 
@@ -32,5 +33,12 @@ export async function markOverlaps(
     type: QueryTypes.SELECT,
     transaction,
   });
-  if (others.length > 0) await run.update({ overlapping: true }, { transaction });
+  if (others.length === 0) return;
+  await run.update({ overlapping: true }, { transaction });
+  await forgetProfiles([runId, ...others.map(({ id }) => id)], transaction);
+}
+
+/** What two fills at once taught is not to be trusted. */
+async function forgetProfiles(runIds: readonly string[], transaction: Transaction): Promise<void> {
+  await AirProfileRow.destroy({ where: { runId: [...runIds] }, transaction });
 }
