@@ -14,6 +14,8 @@ import {
 } from './wire-fields';
 import { wireSetup } from './wire-setup';
 
+export type { AppendAnswer, EventsAnswer, StoredEvent } from './wire-answers';
+
 /** Bodies of the API under `/api/v1`, for the phone and the server alike. kPa, °C, m, ms. */
 
 /** What is to be ticked before a round closes, in the order in which it is done. */
@@ -110,27 +112,6 @@ export const eventsQuery = exactly('the query', {
     .min(0, { error: 'a whole number of 0 or more: the last number that you have' })
     .default(0),
 });
-
-/** One event as the server keeps it. */
-export interface StoredEvent {
-  seq: number;
-  side: 'wheel' | 'cab';
-  deviceId: string;
-  event: z.infer<typeof wireFillEvent>;
-}
-
-/** Answer to reading events, and with `events` to sending them. */
-export interface EventsAnswer {
-  events: StoredEvent[];
-  lastSeq: number;
-  endedSeq: number | null;
-}
-
-export interface AppendAnswer {
-  stored: { id: string; seq: number }[];
-  lastSeq: number;
-  endedSeq: number | null;
-}
 
 /** A body with its version, for sending. */
 export const versioned = <Body extends object>(body: Body) =>
