@@ -14,6 +14,7 @@ export interface RoundHead {
   startedAt: Date;
   timeZone: string;
   ambientC: number;
+  altitudeM: number;
 }
 
 /** A coach as all of its pages know it. */
@@ -55,7 +56,7 @@ async function loadRig(coachId: string) {
 }
 
 /** What came of the last test of the fitting; null until there was one. */
-async function loadFitting(coachId: string) {
+export async function loadFitting(coachId: string) {
   const test = await FittingTest.findOne({
     where: { coachId },
     order: [['testedAt', 'DESC']],
@@ -69,7 +70,8 @@ export async function loadRoundHeads(
 ): Promise<{ open: RoundHead | null; last: RoundHead | null }> {
   const rows = await sequelize.query<RoundHead & { closed: boolean }>(
     `SELECT DISTINCT ON (closed_at IS NULL) id, place, started_at AS "startedAt",
-       time_zone AS "timeZone", ambient_c AS "ambientC", closed_at IS NOT NULL AS closed
+       time_zone AS "timeZone", ambient_c AS "ambientC", altitude_m AS "altitudeM",
+       closed_at IS NOT NULL AS closed
      FROM rounds WHERE coach_id = :coachId
      ORDER BY closed_at IS NULL, started_at DESC`,
     { replacements: { coachId }, type: QueryTypes.SELECT },

@@ -1,7 +1,7 @@
 import { Link } from 'react-router';
 import { ButtonLink } from '~/components/button';
+import { usePhoneState } from '~/fill/use-phone-state';
 import type { CoachHead, RoundHead } from '~/queries/coach.server';
-import { usePhone } from '../rounds/use-phone';
 import { dayWords } from './coach-words';
 
 export interface RoundActionsProps {
@@ -32,7 +32,7 @@ export function RoundActions({ coach, rounds, now }: RoundActionsProps) {
 
 /** This phone may know of a round that the server doesn't, or that one is closed already. */
 function useOpenRound(coachId: string, told: RoundHead | null) {
-  const { rounds } = usePhone();
+  const rounds = usePhoneState((state) => state.rounds);
   const own = Object.values(rounds).findLast(
     (round) => round.coachId === coachId && round.closedAt === null,
   );
