@@ -16,6 +16,8 @@ export interface VesselState {
   tire: { height: number; text: string };
   /** The supply stands above the tire. */
   above: boolean;
+  /** False while it is only being looked for: no headroom is drawn, and nothing missing. */
+  known: boolean;
   marks: readonly VesselMark[];
   /** The picture in words, for a screen reader that asks. */
   words: string;
@@ -26,16 +28,40 @@ const roomKpa = 35;
 const gridKpa = 35;
 /** A governor value whose 80 % band is wider than this is not known well enough to be drawn. */
 const knownBandKpa = 70;
+/** The usual swing, 90 to 120 psi, in kPa: common practice. */
+const usualCutInKpa = 620;
+const usualCutOutKpa = 830;
+
+/** What a vessel is drawn from: an estimate, or the truth of a simulated coach. */
+export interface VesselFigures {
+  supplyKpa: Spread;
+  tireKpa: number;
+  cutInKpa?: Spread;
+  cutOutKpa?: Spread;
+  /** False while the supply is only being looked for. */
+  known: boolean;
+}
+
+/** The vessel of one advice. */
+export function vesselOf(advice: Advice, setup: FillSetup, unit: PressureUnit): VesselState {
+  const { supplyKpa, cutInKpa, cutOutKpa } = advice;
+  const known = advice.call !== 'read-supply';
+  const tireKpa = advice.tireKpa.p50;
+  return drawVessel({ supplyKpa, tireKpa, cutInKpa, cutOutKpa, known }, setup.tire, unit);
+}
 
 /** Draws supply, tire, target and governor on a scale that rarely changes during a fill. */
-export function vesselOf(advice: Advice, setup: FillSetup, unit: PressureUnit): VesselState {
-  const scale = scaleOf(advice, setup);
+export function drawVessel(
+  figures: VesselFigures,
+  tire: FillSetup['tire'],
+  unit: PressureUnit,
+): VesselState {
+  const { supplyKpa, tireKpa, known } = figures;
+  const scale = scaleOf(figures, tire);
   const height = (kpa: number) =>
     Math.min(100, Math.max(0, ((kpa - scale.low) / (scale.high - scale.low)) * 100));
-  const { supplyKpa, tireKpa } = advice;
-  const unsure = advice.call === 'read-supply';
-  const supplyText = unsure ? '?' : whole(supplyKpa.p50, unit);
-  const tireText = formatPressure(gaugeKpa(tireKpa.p50), unit, { withUnit: false });
+  const supplyText = known ? whole(supplyKpa.p50, unit) : '?';
+  const tireText = formatPressure(gaugeKpa(tireKpa), unit, { withUnit: false });
   return {
     supply: {
       low: height(supplyKpa.p10),
@@ -43,39 +69,37 @@ export function vesselOf(advice: Advice, setup: FillSetup, unit: PressureUnit): 
       high: height(supplyKpa.p90),
       text: supplyText,
     },
-    tire: { height: height(tireKpa.p50), text: tireText },
-    above: supplyKpa.p50 > tireKpa.p50,
-    marks: marksOf(advice, setup, unit).map(({ kpa, ...mark }) => ({
+    tire: { height: height(tireKpa), text: tireText },
+    above: supplyKpa.p50 > tireKpa,
+    known,
+    marks: marksOf(figures, tire, unit).map(({ kpa, ...mark }) => ({
       ...mark,
       height: height(kpa),
     })),
-    words: `Supply ${unsure ? 'not known' : `${supplyText} ${unit}`}, tire ${tireText} ${unit}.`,
+    words: `Supply ${known ? `${supplyText} ${unit}` : 'not known'}, tire ${tireText} ${unit}.`,
   };
 }
 
-function scaleOf({ cutInKpa, cutOutKpa }: Advice, { tire }: FillSetup) {
-  const lows = [tire.startKpa, tire.targetKpa, cutInKpa?.p50 ?? 620];
-  const highs = [tire.startKpa, tire.targetKpa, cutOutKpa?.p50 ?? 830];
+function scaleOf({ cutInKpa, cutOutKpa }: VesselFigures, tire: FillSetup['tire']) {
+  const lows = [tire.startKpa, tire.targetKpa, cutInKpa?.p50 ?? usualCutInKpa];
+  const highs = [tire.startKpa, tire.targetKpa, cutOutKpa?.p50 ?? usualCutOutKpa];
   return {
     low: Math.max(0, Math.floor((Math.min(...lows) - roomKpa) / gridKpa) * gridKpa),
     high: Math.ceil((Math.max(...highs) + roomKpa) / gridKpa) * gridKpa,
   };
 }
 
-function marksOf(advice: Advice, { tire }: FillSetup, unit: PressureUnit) {
+function marksOf(figures: VesselFigures, tire: FillSetup['tire'], unit: PressureUnit) {
   const marks: { kind: VesselMark['kind']; kpa: number; text: string }[] = [
     { kind: 'target', kpa: tire.targetKpa, text: `target ${exact(tire.targetKpa, unit)}` },
   ];
-  const cutOut = known(advice.cutOutKpa);
+  const cutOut = known(figures.cutOutKpa);
   if (cutOut) marks.push({ kind: 'cut-out', kpa: cutOut, text: `cut-out ${whole(cutOut, unit)}` });
-  const cutIn = known(advice.cutInKpa);
+  const cutIn = known(figures.cutInKpa);
   if (cutIn) marks.push({ kind: 'cut-in', kpa: cutIn, text: `cut-in ${whole(cutIn, unit)}` });
   if (tire.limitKpa !== undefined) {
-    marks.push({
-      kind: 'limit',
-      kpa: tire.limitKpa,
-      text: `limit ${exact(tire.limitKpa, unit)}`,
-    });
+    const text = `limit ${exact(tire.limitKpa, unit)}`;
+    marks.push({ kind: 'limit', kpa: tire.limitKpa, text });
   }
   return marks;
 }

@@ -46,7 +46,7 @@ export function LiveKeys(props: KeysProps) {
 
 function Strip(props: KeysProps) {
   const { ui, state, handlers, clock, last, hint, setup, unit, shows } = props;
-  const first = hint && !last && !state.notice?.done ? { text: hint, isHint: true } : undefined;
+  const first = hint && !last ? { text: hint, isHint: true } : undefined;
   const entered = ui.entered && ui.entered.until > clock ? ui.entered : undefined;
   return (
     <NoticeStrip

@@ -17,7 +17,7 @@ export function LiveVessel({ vessel, bare = false }: { vessel: VesselState; bare
   return (
     <div className="vessel" data-size={size} style={places} ref={box} aria-hidden="true">
       <div className="vessel-level" />
-      {above ? <div className="vessel-head" /> : <div className="vessel-lack" />}
+      {vessel.known && <div className={above ? 'vessel-head' : 'vessel-lack'} />}
       {vessel.marks.map((mark) => (
         <div
           key={mark.kind}
