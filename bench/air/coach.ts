@@ -236,7 +236,7 @@ function drawTire(dice: Dice, air: Air, plan: TirePlan): WorldTire {
     saidVolumeL: Math.round(plan.volumeL * between(dice, 0.88, 1.14)),
     // Up to twofold from wheel to wheel (design/engine.md).
     coreC: plan.coreC * 2 ** between(dice, -0.5, 0.5),
-    warmthGain: between(dice, 0.1, 0.35),
+    warmthGain: between(dice, 0.05, 0.3),
     settleS: between(dice, 20, 55),
     reachable: psi(plan.targetPsi - TOLERANCE_PSI) < peakKpa(air),
   };

@@ -1,4 +1,5 @@
-import { Worker } from 'node:worker_threads';
+import { type ChildProcess, fork } from 'node:child_process';
+import { fileURLToPath } from 'node:url';
 import { type Job, runJob } from './job';
 import type { FillOutcome } from './outcome';
 
@@ -31,24 +32,26 @@ export async function runAll(
 async function withWorker(
   lane: (run: (job: Job) => Promise<FillOutcome[]>) => Promise<void>,
 ): Promise<void> {
-  const worker = new Worker(new URL('./worker.ts', import.meta.url), {
-    execArgv: ['--import', 'tsx'],
+  // A process and not a thread: a thread does not inherit the loader that reads TypeScript.
+  const worker = fork(fileURLToPath(new URL('./worker.ts', import.meta.url)), {
+    execArgv: process.execArgv,
+    serialization: 'advanced',
   });
   try {
     await lane((job) => ask(worker, job));
   } finally {
-    await worker.terminate();
+    worker.kill();
   }
 }
 
-function ask(worker: Worker, job: Job): Promise<FillOutcome[]> {
+function ask(worker: ChildProcess, job: Job): Promise<FillOutcome[]> {
   return new Promise((resolve, reject) => {
     const settle = (finish: () => void) => {
       worker.removeAllListeners();
       finish();
     };
     worker.once('message', (outcomes: FillOutcome[]) => settle(() => resolve(outcomes)));
-    worker.once('error', (error) => settle(() => reject(error)));
-    worker.postMessage(job);
+    worker.once('exit', (code) => settle(() => reject(new Error(`worker ended with ${code}`))));
+    worker.send(job);
   });
 }

@@ -31,25 +31,25 @@ export interface PersonTraits {
 export const PLAIN: PersonTraits = {
   guessPsiPerS: 0.12,
   guessSigma: 0.4,
-  boldness: 0.85,
+  boldness: 0.82,
   learns: false,
-  risingPsi: 3,
-  restingPsi: 6,
+  risingPsi: 5,
+  restingPsi: 9,
   nearPsi: 1.5,
-  longestHoldS: 120,
-  longestFirstS: 40,
+  longestHoldS: 75,
+  longestFirstS: 30,
 };
 
 export const EXPERT: PersonTraits = {
   guessPsiPerS: 0.12,
   guessSigma: 0.3,
-  boldness: 1,
+  boldness: 0.95,
   learns: true,
   risingPsi: 1,
   restingPsi: 4,
-  nearPsi: 0,
+  nearPsi: -0.5,
   longestHoldS: 240,
-  longestFirstS: 60,
+  longestFirstS: 50,
 };
 
 /** What a person takes along from tire to tire. */
@@ -93,7 +93,7 @@ const LONGEST_S = 3600;
 const GLANCE_S = 0.5;
 const MOVEMENT_S = 4;
 /** After the compressor has loaded nobody pumps again sooner than this, s. */
-const TRUSTS_LOADING_S = 15;
+const TRUSTS_LOADING_S = 20;
 /** No hiss from a chuck: noticed about this soon, s. */
 const NOTICES_SILENCE_S = 10;
 /** The least gain that a person takes for one, kPa. */
@@ -256,7 +256,7 @@ function hold(person: Person): void {
 function takeOff(person: Person): void {
   person.world.chuck = 'off';
   person.heldFor = person.elapsed - person.heldFrom;
-  begin(person, 'gauge', between(person.dice, 6, 10));
+  begin(person, 'gauge', between(person.dice, 9, 15));
 }
 
 function gauge(person: Person): void {

@@ -1,6 +1,6 @@
-import { parentPort } from 'node:worker_threads';
 import { type Job, runJob } from './job';
 
-parentPort?.on('message', (job: Job) => {
-  runJob(job).then((outcomes) => parentPort?.postMessage(outcomes));
+/** A process of its own: takes a job, answers with its outcomes, until the bench lets go. */
+process.on('message', (job: Job) => {
+  runJob(job).then((outcomes) => process.send?.(outcomes));
 });
