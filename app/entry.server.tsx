@@ -4,10 +4,12 @@ import { isbot } from 'isbot';
 import { renderToPipeableStream } from 'react-dom/server';
 import type { EntryContext, HandleErrorFunction, RouterContextProvider } from 'react-router';
 import { isRouteErrorResponse, ServerRouter } from 'react-router';
+import { requireEnv } from '~/env.server';
 import { log } from '~/services/log.server';
 import { nonceContext } from '~/services/security-headers.server';
 import { armShutdown } from '~/services/shutdown.server';
 
+requireEnv();
 armShutdown();
 
 /** Milliseconds after which a page that has not finished streaming is given up. */

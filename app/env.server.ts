@@ -83,6 +83,14 @@ function read(): Env {
   return parsedOnce;
 }
 
+/**
+ * Reads the settings now, so that a server with incomplete ones ends at once.
+ * @throws {EnvError}
+ */
+export function requireEnv(): void {
+  read();
+}
+
 /** The settings, parsed at the first use and then kept, so that importing this never throws. */
 export const env: Env = new Proxy({} as Env, {
   get: (_, key) => Reflect.get(read(), key),

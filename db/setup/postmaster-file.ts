@@ -1,6 +1,6 @@
 import { existsSync, readFileSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
-import { commandLine, isAlive } from './processes';
+import { commandLine, exists } from './processes';
 
 /** Above any number that Linux gives to a process. */
 const NO_PROCESS = 2 ** 22 + 1;
@@ -10,7 +10,7 @@ const NO_PROCESS = 2 ** 22 + 1;
  *
  * PostgreSQL refuses to start while the process number in `postmaster.pid` exists and belongs to
  * the same user, even when that number went to some other program meanwhile, which is common where
- * numbers are low. In that case the number is replaced by one that cannot exist, and the rest of the
+ * numbers are low, or when it ended and its parent has not taken notice. In that case the number is replaced by one that cannot exist, and the rest of the
  * file is left as it is, because PostgreSQL checks the shared memory named in it: removing the file
  * would remove that safeguard.
  */
@@ -20,7 +20,7 @@ export function readRunning(data: string): number | undefined {
   const lines = readFileSync(file, 'utf8').split('\n');
   const pid = Number(lines[0]);
   const port = Number(lines[3]);
-  if (!Number.isInteger(pid) || pid <= 0 || !isAlive(pid)) return undefined;
+  if (!Number.isInteger(pid) || pid <= 0 || !exists(pid)) return undefined;
   if (commandLine(pid).includes(data)) return port > 0 ? port : undefined;
   writeFileSync(file, [String(NO_PROCESS), ...lines.slice(1)].join('\n'));
   return undefined;

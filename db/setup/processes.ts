@@ -1,7 +1,12 @@
 import { readFileSync } from 'node:fs';
 
-/** True while the process exists, whoever owns it. */
+/** True while the process runs, whoever owns it. */
 export function isAlive(pid: number): boolean {
+  return exists(pid) && stateOf(pid) !== 'Z';
+}
+
+/** True while its number is taken: also after its end, until its parent has taken notice. */
+export function exists(pid: number): boolean {
   try {
     process.kill(pid, 0);
     return true;
@@ -21,11 +26,20 @@ export function commandLine(pid: number): string[] {
 
 /** When a process began, in the kernel's ticks: tells it from a later one with the same number. */
 export function startTicks(pid: number): string | undefined {
+  return fieldsOf(pid)[19];
+}
+
+function stateOf(pid: number): string | undefined {
+  return fieldsOf(pid)[0];
+}
+
+/** The fields of `/proc/…/stat` from the state on. */
+function fieldsOf(pid: number): string[] {
   try {
     // The name in brackets may hold spaces, so the fields are counted from behind it.
     const stat = readFileSync(`/proc/${pid}/stat`, 'utf8');
-    return stat.slice(stat.lastIndexOf(')') + 2).split(' ')[19];
+    return stat.slice(stat.lastIndexOf(')') + 2).split(' ');
   } catch {
-    return undefined;
+    return [];
   }
 }
