@@ -6,7 +6,7 @@ import { sequelize } from '~/models/database.server';
 import { Run } from '~/models/run.server';
 import { loadLog } from '~/queries/run-log.server';
 import { log } from '~/services/log.server';
-import { replay } from '~/services/replay-pool.server';
+import { ReplayEnded, replay } from '~/services/replay-pool.server';
 
 /**
  * Replays a fill that has ended and keeps its result, as a new row, with the version of the engine
@@ -78,21 +78,29 @@ async function keepProfile(
   });
 }
 
-/** Runs being computed; true when something was added meanwhile. */
-const computing = new Map<string, boolean>();
+/** Results that are on their way, by run. */
+const computing = new Map<string, { again: boolean; done: Promise<void> }>();
 
 /** Computes a fill's result soon and answers at once; what is added meanwhile is computed too. */
 export function queueResult(runId: string): void {
-  if (computing.has(runId)) {
-    computing.set(runId, true);
-    return;
+  const known = computing.get(runId);
+  if (known) known.again = true;
+  else computing.set(runId, { again: false, done: work(runId) });
+}
+
+async function work(runId: string): Promise<void> {
+  try {
+    await computeResult(runId);
+  } catch (fault) {
+    // A server that stops leaves the result to the first view.
+    if (!(fault instanceof ReplayEnded)) log.error({ err: fault, runId }, 'no result was computed');
   }
-  computing.set(runId, false);
-  computeResult(runId)
-    .catch((fault: unknown) => log.error({ err: fault, runId }, 'a result could not be computed'))
-    .finally(() => {
-      const again = computing.get(runId);
-      computing.delete(runId);
-      if (again) queueResult(runId);
-    });
+  const again = computing.get(runId)?.again;
+  computing.delete(runId);
+  if (again) queueResult(runId);
+}
+
+/** Waits until no result is on its way. */
+export async function resultsSettled(): Promise<void> {
+  while (computing.size > 0) await Promise.all([...computing.values()].map(({ done }) => done));
 }

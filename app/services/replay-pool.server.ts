@@ -15,6 +15,11 @@ export interface ReplayOrder {
 
 export type ReplayAnswer = { readonly replayed: Replayed } | { readonly fault: string };
 
+/** The pool was told to stop, or its worker was lost, before there was an answer. */
+export class ReplayEnded extends Error {
+  override readonly name = 'ReplayEnded';
+}
+
 interface Job {
   readonly order: ReplayOrder;
   readonly resolve: (replayed: Replayed) => void;
@@ -41,7 +46,7 @@ export function replay(order: ReplayOrder): Promise<Replayed> {
 
 /** Ends the threads. What was asked and not yet answered is refused. */
 export async function stopReplayPool(): Promise<void> {
-  for (const { reject } of waiting.splice(0)) reject(new Error('the replay pool has ended'));
+  for (const { reject } of waiting.splice(0)) reject(new ReplayEnded('the replay pool has ended'));
   idle.length = 0;
   await Promise.all([...all].map((worker) => worker.terminate()));
 }
@@ -72,7 +77,7 @@ function work(worker: Worker, { order, resolve, reject }: Job): void {
   const timer = setTimeout(() => void worker.terminate(), patienceMs);
   const lost = (cause?: unknown) => {
     clearTimeout(timer);
-    reject(cause instanceof Error ? cause : new Error('the replay worker ended before its answer'));
+    reject(cause instanceof Error ? cause : new ReplayEnded('the worker ended before its answer'));
   };
   worker.ref();
   worker.once('exit', lost);
