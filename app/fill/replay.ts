@@ -6,6 +6,7 @@ import {
   type FillSetup,
   type Spread,
 } from '~/air';
+import { chuckSpans, type TimeSpan } from './chuck-spans';
 import { lastGaugedKpa } from './fill-summary';
 import { endOf, fillEventsOf, type RunLog } from './log';
 import type { Ending } from './wire-events';
@@ -46,12 +47,6 @@ export interface Replayed {
   readonly profile: AirProfile;
 }
 
-/** Seconds from one to another. */
-interface Span {
-  readonly from: number;
-  readonly to: number;
-}
-
 /** More samples than this show no more on a chart; a long fill is sampled more coarsely. */
 const mostSamples = 900;
 
@@ -77,22 +72,6 @@ export function replayFill(setup: FillSetup, log: RunLog): Replayed {
   return { result, samples, profile: fill.profile() };
 }
 
-/** When the chuck was on: *on* twice is no change, and one never taken off lasts until the end. */
-export function chuckSpans(events: readonly FillEvent[], until: number): Span[] {
-  const gone = new Set(events.flatMap((event) => (event.type === 'taken-back' ? event.of : [])));
-  const spans: Span[] = [];
-  let since: number | undefined;
-  for (const event of events) {
-    if (event.type !== 'chuck' || (event.id && gone.has(event.id))) continue;
-    if (event.on) since ??= event.at;
-    if (event.on || since === undefined) continue;
-    spans.push({ from: since, to: event.at });
-    since = undefined;
-  }
-  if (since !== undefined && since < until) spans.push({ from: since, to: until });
-  return spans;
-}
-
 /** An even grid, and every event, so that no edge of a hold falls between two samples. */
 function sampleTimes(events: readonly FillEvent[], until: number): number[] {
   const step = Math.max(1, Math.ceil(until / mostSamples));
@@ -113,7 +92,7 @@ function rounded({ p10, p50, p90 }: Spread): Spread {
   return { p10: round(p10), p50: round(p50), p90: round(p90) };
 }
 
-function figuresOf({ tire }: FillSetup, samples: readonly TraceSample[], on: readonly Span[]) {
+function figuresOf({ tire }: FillSetup, samples: readonly TraceSample[], on: readonly TimeSpan[]) {
   const supply = samples.map(({ supplyKpa }) => supplyKpa.p50);
   return {
     startKpa: tire.startKpa,
@@ -127,7 +106,7 @@ function figuresOf({ tire }: FillSetup, samples: readonly TraceSample[], on: rea
   };
 }
 
-function lossOf(samples: readonly TraceSample[], on: readonly Span[]) {
+function lossOf(samples: readonly TraceSample[], on: readonly TimeSpan[]) {
   let lostKpa = 0;
   let secondsBelow = 0;
   samples.forEach((sample, index) => {

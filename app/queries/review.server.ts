@@ -1,3 +1,4 @@
+import { setTimeout as pause } from 'node:timers/promises';
 import type { Actor } from '~/access/can';
 import type { FillSetup } from '~/air';
 import { computeResult } from '~/commands/compute-result.server';
@@ -33,14 +34,21 @@ export interface Review {
   samples: TraceSample[];
   /** Null while the fill is open. */
   result: (FillResult & { engineVersion: string; lastSeq: number }) | null;
+  /** The replay is still at work: there are no samples yet, and perhaps no result. */
+  pending: boolean;
 }
 
 /**
  * A fill with its log, its trace and its result. A result that is missing, or was computed before
  * the log's last event, is computed now.
+ * @param patienceMs after this time it answers without the trace, which is then `pending`
  * @throws Refusal `fill-not-found` to those who may not see the coach; `not-allowed` to a helper
  */
-export async function loadReview(actor: Actor, fillId: string): Promise<Review> {
+export async function loadReview(
+  actor: Actor,
+  fillId: string,
+  patienceMs = 60_000,
+): Promise<Review> {
   const run = await requireRun(actor, 'log:see', fillId);
   const [coach, round, log] = await Promise.all([
     Coach.findByPk(run.coachId),
@@ -48,12 +56,16 @@ export async function loadReview(actor: Actor, fillId: string): Promise<Review> 
     loadLog(run.id),
   ]);
   if (!coach || !round) throw notFound('fill');
-  const { samples } = await traceOf(run, log);
+  const replayed = await Promise.race([
+    traceOf(run, log),
+    pause(patienceMs, undefined, { ref: false }),
+  ]);
   const { id, coachId, roundId, position, startedAt, setup, overlapping } = run;
   const { timeZone, place } = round;
   return {
     ...{ id, coachId, coachName: coach.name, roundId, position, startedAt, timeZone, place },
-    ...{ setup, overlapping, log, samples, result: await resultOf(run) },
+    ...{ setup, overlapping, log, samples: replayed?.samples ?? [] },
+    ...{ result: await resultOf(run), pending: !replayed },
   };
 }
 

@@ -1,7 +1,7 @@
+import type { TimeSpan } from '~/fill/chuck-spans';
 import { formatDuration, seconds } from '~/units';
 import type { ChartFrame } from './chart-frame';
 import { textWidth, useChartScales } from './chart-scales';
-import type { TimeSpan } from './chuck-spans';
 import { spreadHeights } from './end-labels';
 import { placeKindLabels } from './reading-labels';
 import type { ChartView, ReadingKind } from './review-view';

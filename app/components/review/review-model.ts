@@ -1,14 +1,5 @@
-import type { Spread } from '~/air';
+import type { FillResult, TraceSample } from '~/fill/replay';
 import type { WireEvent } from '~/fill/wire-events';
-
-/** What the estimate said at one moment of the fill, gauge kPa. */
-export interface ReviewSample {
-  /** Seconds since the fill's start. */
-  at: number;
-  supplyKpa: Spread;
-  /** Settled. */
-  tireKpa: Spread;
-}
 
 /**
  * What became of an event: it counted; it was taken back; it happened after the end; it says again
@@ -33,24 +24,10 @@ export interface ReviewTrace {
   valve: boolean;
   targetKpa: number;
   /** By time, the first at the start, the last at the end. */
-  samples: readonly ReviewSample[];
+  samples: readonly TraceSample[];
   /** By number. */
   entries: readonly ReviewEntry[];
 }
 
-/** What was computed from the log of a fill that has ended. Pressures are gauge kPa. */
-export interface ReviewResult {
-  startKpa: number;
-  /** As gauged after the last hold; null when nobody gauged it. */
-  endKpa: number | null;
-  targetKpa: number;
-  toleranceKpa: number;
-  secondsOn: number;
-  timesOn: number;
-  /** Of the tire's pressure, through a supply that was below it; kPa. */
-  lostKpa: number;
-  highestSupplyKpa: number;
-  lowestSupplyKpa: number;
-  engineVersion: string;
-  lastSeq: number;
-}
+/** What was computed from the log of a fill that has ended. */
+export type ReviewResult = FillResult & { engineVersion: string; lastSeq: number };

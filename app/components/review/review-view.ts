@@ -1,8 +1,9 @@
-import type { Call } from '~/air';
-import type { PressureUnit } from '~/units';
-import { chuckSpans, type TimeSpan } from './chuck-spans';
+import type { Call, FillEvent } from '~/air';
+import { chuckSpans, type TimeSpan } from '~/fill/chuck-spans';
+import type { TraceSample } from '~/fill/replay';
+import { type PressureUnit, pressureRange } from '~/units';
 import { callWords, type EntryLine, entryLine } from './entry-words';
-import type { ReviewEntry, ReviewSample, ReviewTrace } from './review-model';
+import type { ReviewEntry, ReviewTrace } from './review-model';
 
 /** One point of the curves. Pressures are gauge kPa; times are seconds since the start. */
 export interface CurvePoint {
@@ -54,7 +55,7 @@ export interface TableLine extends EntryLine {
 export function chartOf(trace: ReviewTrace): ChartView {
   const used = trace.entries.filter(({ use }) => use === 'used');
   const until = Math.max(1, trace.samples.at(-1)?.at ?? 0, ...used.map(secondsOf));
-  const onSpans = chuckSpans(used, until);
+  const onSpans = chuckSpans(used.flatMap(chuckOf), until);
   return {
     until,
     points: curveOf(trace.samples, onSpans),
@@ -87,6 +88,11 @@ export function linesOf(trace: ReviewTrace, unit: PressureUnit): TableLine[] {
 
 const secondsOf = ({ event }: ReviewEntry) => event.atMs / 1000;
 
+function chuckOf(entry: ReviewEntry): FillEvent[] {
+  const { event } = entry;
+  return event.type === 'chuck' ? [{ type: 'chuck', on: event.on, at: secondsOf(entry) }] : [];
+}
+
 function dotOf(entry: ReviewEntry): ReadingDot[] {
   const { event } = entry;
   const at = secondsOf(entry);
@@ -111,7 +117,7 @@ function callsOf(used: readonly ReviewEntry[], valve: boolean): ShownCall[] {
  * The samples with a point of its own at each edge of a hold and wherever supply and tire meet, so
  * that the hatch begins and ends where it should.
  */
-function curveOf(samples: readonly ReviewSample[], onSpans: readonly TimeSpan[]): CurvePoint[] {
+function curveOf(samples: readonly TraceSample[], onSpans: readonly TimeSpan[]): CurvePoint[] {
   const times = new Set(samples.map(({ at }) => at));
   for (const { from, to } of onSpans) times.add(from).add(to);
   for (const at of meetings(samples)) times.add(at);
@@ -124,7 +130,7 @@ function curveOf(samples: readonly ReviewSample[], onSpans: readonly TimeSpan[])
 }
 
 function pointOf(
-  { at, supplyKpa, tireKpa }: ReviewSample,
+  { at, supplyKpa, tireKpa }: TraceSample,
   onSpans: readonly TimeSpan[],
 ): CurvePoint {
   const isOn = onSpans.some(({ from, to }) => at >= from && at <= to);
@@ -133,15 +139,19 @@ function pointOf(
   return {
     at,
     supply: supplyKpa.p50,
-    band: [supplyKpa.p10, supplyKpa.p90],
+    band: [asPressure(supplyKpa.p10), asPressure(supplyKpa.p90)],
     tire: tireKpa.p50,
     lack: isOn && isBelow ? [supplyKpa.p50, tireKpa.p50] : null,
   };
 }
 
+/** Keeps the edges of a very unsure estimate inside of what a gauge pressure can be. */
+const asPressure = (kpa: number) =>
+  Math.min(pressureRange.maximum, Math.max(pressureRange.minimum, kpa));
+
 /** The times at which the middle estimates of supply and tire are the same. */
-function meetings(samples: readonly ReviewSample[]): number[] {
-  const headroom = ({ supplyKpa, tireKpa }: ReviewSample) => supplyKpa.p50 - tireKpa.p50;
+function meetings(samples: readonly TraceSample[]): number[] {
+  const headroom = ({ supplyKpa, tireKpa }: TraceSample) => supplyKpa.p50 - tireKpa.p50;
   return samples.flatMap((sample, index) => {
     const next = samples[index + 1];
     if (!next) return [];
@@ -152,7 +162,7 @@ function meetings(samples: readonly ReviewSample[]): number[] {
 }
 
 /** The estimate at a time, on a straight line between two samples; undefined outside of them. */
-export function sampleAt(samples: readonly ReviewSample[], at: number): ReviewSample | undefined {
+export function sampleAt(samples: readonly TraceSample[], at: number): TraceSample | undefined {
   const index = samples.findIndex((sample) => sample.at >= at);
   const after = samples[index];
   const before = samples[index - 1];
