@@ -9,6 +9,8 @@ export interface Column<Row> {
   figure?: boolean;
   /** Names the row, for a screen reader. */
   rowHead?: boolean;
+  /** Utilities for head and cells: `max-sm:hidden` where a phone has no room. */
+  className?: string;
   /** Makes the column sortable. */
   sortBy?: (row: Row) => number | string;
 }
@@ -68,7 +70,7 @@ function HeadCell<Row>({
   const mine = order?.key === column.key ? order : undefined;
   const sort = mine && (mine.down ? 'descending' : 'ascending');
   return (
-    <th scope="col" className={column.figure ? 'figure' : undefined} aria-sort={sort}>
+    <th scope="col" className={classOf(column)} aria-sort={sort}>
       {column.sortBy ? (
         <button type="button" className="sort" onClick={() => onTurn(column.key)}>
           {column.head}
@@ -82,13 +84,17 @@ function HeadCell<Row>({
 }
 
 function BodyCell<Row>({ column, row }: { column: Column<Row>; row: Row }) {
-  const className = column.figure ? 'figure' : undefined;
+  const className = classOf(column);
   if (!column.rowHead) return <td className={className}>{column.cell(row)}</td>;
   return (
     <th scope="row" className={className}>
       {column.cell(row)}
     </th>
   );
+}
+
+function classOf<Row>({ figure, className }: Column<Row>): string | undefined {
+  return [figure && 'figure', className].filter(Boolean).join(' ') || undefined;
 }
 
 function sortRows<Row>(

@@ -37,7 +37,7 @@ export default function CoachOverview({ loaderData }: Route.ComponentProps) {
     note: wantsAction(verdict) ? verdictWord(verdict) : undefined,
   }));
   return (
-    <div className="grid gap-x-18 gap-y-9 lg:grid-cols-[470px_1fr] lg:grid-rows-[auto_1fr]">
+    <div className="grid grid-cols-[minmax(0,1fr)] gap-x-18 gap-y-9 lg:grid-cols-[470px_minmax(0,1fr)] lg:grid-rows-[auto_1fr]">
       <header className="grid gap-6 lg:col-start-2">
         <div>
           <h1>{coach.name}</h1>

@@ -47,7 +47,7 @@ export default function CoachTires({ loaderData, actionData: answer }: Route.Com
   const chosen = answer?.values.position ?? search.get('tire') ?? '';
   const tire = tires.find(({ position }) => position === chosen);
   return (
-    <div className="grid gap-8">
+    <div className="grid grid-cols-[minmax(0,1fr)] gap-8">
       <div>
         <h1>Tires</h1>
         <p className="mt-3 max-w-[34rem]">

@@ -24,7 +24,7 @@ export function FittingTest({ coach, unit, now, answer, saved }: AirSection) {
   return (
     <Form method="post" action="#fitting" className="form" id="fitting" noValidate>
       <div>
-        <h2>The fitting test</h2>
+        <h2 className="mb-2">The fitting test</h2>
         <p>
           {fitting
             ? `Tested ${dayWords(fitting.testedAt, now)}. ${outcomeWords[fitting.outcome]}`
@@ -73,8 +73,10 @@ function TestSteps({ unit }: { unit: PressureUnit }) {
   });
   return (
     <ol className="grid list-decimal gap-3 pl-6">
-      <li>Let the supply reach cut-out. Park on level ground, wheels chocked, engine off.</li>
-      <li>Connect the hose. Open the chuck for a moment, pointed away. Does air come out?</li>
+      <li>
+        Park on level ground with the wheels chocked. Let the supply reach cut-out. Stop the engine.
+      </li>
+      <li>Connect the hose. Point the chuck away and open it for a moment. Does air come out?</li>
       <li>
         Note the gauge. Bring the supply down by {fall}, as this coach allows. Stop at the low-air
         warning.

@@ -78,11 +78,15 @@ const onlyWithTag = 'group-has-[[value=two-axles]:checked]:hidden';
 function AxleFields({ axle, unit, answer }: AxleFieldsProps) {
   const target = `${axle}.target`;
   return (
-    <fieldset className={`hair grid gap-6 pt-6 ${axle === 'tag' ? onlyWithTag : ''}`}>
-      <legend className="float-left w-full">
+    <fieldset
+      className={`hair grid items-end gap-6 pt-6 sm:grid-cols-2 ${axle === 'tag' ? onlyWithTag : ''}`}
+    >
+      <legend className="float-left w-full sm:col-span-2">
         <h2>{axleName(axle)} axle</h2>
       </legend>
-      <p className="quiet -mt-4">For all of its tires. You can change single ones later.</p>
+      <p className="quiet -mt-4 sm:col-span-2">
+        For all of its tires. You can change single ones later.
+      </p>
       <PressureField
         label="Target, cold"
         hint="By the tire maker’s table, for the heavier end of this axle."

@@ -53,7 +53,7 @@ export function RigForm({ coach, unit, answer, saved }: AirSection) {
   return (
     <Form method="post" action="#rig" className="form" id="rig" noValidate>
       <div>
-        <h2>Hose, chuck and gauge</h2>
+        <h2 className="mb-2">Hose, chuck and gauge</h2>
         <p>
           Name them as you call them. What is learned belongs to these three.{' '}
           <Link to="/help/rig">What a good rig is</Link>
@@ -64,27 +64,29 @@ export function RigForm({ coach, unit, answer, saved }: AirSection) {
       {text('hose', 'Hose', 'For example: grey, 15 m. Rated 200 psi or more.')}
       {text('chuck', 'Chuck', 'One that shuts by itself and holds by itself.')}
       {text('gauge', 'Gauge', 'One that spans at least 160 psi.')}
-      <ChoiceField
-        label="Where the gauge sits"
-        name="gaugePlace"
-        choices={places}
-        defaultValue={shownValue(answer, 'gaugePlace', rig?.gaugePlace)}
-        error={problemOf(answer, 'gaugePlace')}
-      />
-      <ChoiceField
-        label="A ball valve in the hose"
-        name="hasValve"
-        choices={[
-          { value: 'yes', label: 'Yes', hint: 'The chuck goes on with the valve shut.' },
-          { value: 'no', label: 'No' },
-        ]}
-        defaultValue={shownValue(
-          answer,
-          'hasValve',
-          rig ? (rig.hasValve ? 'yes' : 'no') : undefined,
-        )}
-        error={problemOf(answer, 'hasValve')}
-      />
+      <fieldset disabled={!mayEdit} className="contents">
+        <ChoiceField
+          label="Where the gauge sits"
+          name="gaugePlace"
+          choices={places}
+          defaultValue={shownValue(answer, 'gaugePlace', rig?.gaugePlace)}
+          error={problemOf(answer, 'gaugePlace')}
+        />
+        <ChoiceField
+          label="A ball valve in the hose"
+          name="hasValve"
+          choices={[
+            { value: 'yes', label: 'Yes', hint: 'The chuck goes on with the valve shut.' },
+            { value: 'no', label: 'No' },
+          ]}
+          defaultValue={shownValue(
+            answer,
+            'hasValve',
+            rig ? (rig.hasValve ? 'yes' : 'no') : undefined,
+          )}
+          error={problemOf(answer, 'hasValve')}
+        />
+      </fieldset>
       <PressureField
         label="One graduation of the gauge"
         name="stepKpa"

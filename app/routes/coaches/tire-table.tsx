@@ -17,13 +17,13 @@ export interface TireTableProps {
   unit: PressureUnit;
 }
 
-type Row = TireState & { verdict: ColdVerdict; place: number };
+type Row = TireState & { verdict: ColdVerdict };
 
 /** Every tire with its last pressure, target, change and what it needs. */
 export function TireTable({ tires, check, unit }: TireTableProps) {
   const rows = check.tires.flatMap(({ verdict }, place) => {
     const tire = tires[place];
-    return tire ? [{ ...tire, verdict, place }] : [];
+    return tire ? [{ ...tire, verdict }] : [];
   });
   return <DataTable columns={columnsIn(unit)} rows={rows} rowKey={({ tireId }) => tireId} />;
 }
@@ -39,16 +39,14 @@ function columnsIn(unit: PressureUnit): Column<Row>[] {
     {
       key: 'tire',
       head: 'Tire',
-      cell: ({ position }) => positionName(position),
+      cell: NameCell,
       rowHead: true,
-      sortBy: ({ place }) => place,
     },
     {
       key: 'cold',
       head: `Cold, ${unit}`,
       cell: ({ kpa }) => <b className="text-[19px]">{pressure(kpa)}</b>,
       figure: true,
-      sortBy: ({ kpa }) => kpa ?? -1,
     },
     { key: 'target', head: 'Target', cell: ({ targetKpa }) => pressure(targetKpa), figure: true },
     {
@@ -62,11 +60,27 @@ function columnsIn(unit: PressureUnit): Column<Row>[] {
       head: 'A month',
       cell: ({ lossPerMonthKpa }) => change(lossPerMonthKpa === null ? null : -lossPerMonthKpa),
       figure: true,
-      sortBy: ({ lossPerMonthKpa }) => -(lossPerMonthKpa ?? 0),
     },
-    { key: 'word', head: <span className="only-heard">What it needs</span>, cell: VerdictCell },
+    {
+      key: 'word',
+      head: <span className="only-heard">What it needs</span>,
+      cell: VerdictCell,
+      className: 'max-sm:hidden',
+    },
   ];
 }
+
+/** A phone has no room for the last column, so what a tire needs stands below its name. */
+const NameCell = ({ position, verdict }: Row) => (
+  <>
+    {positionName(position)}
+    {wantsAction(verdict) && (
+      <span className="block sm:hidden">
+        <span className="needs">{verdictWord(verdict)}</span>
+      </span>
+    )}
+  </>
+);
 
 const VerdictCell = ({ verdict }: Row) => (
   <span className={wantsAction(verdict) ? 'needs' : undefined}>{verdictWord(verdict)}</span>
