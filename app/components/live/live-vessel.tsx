@@ -1,6 +1,6 @@
 import { type CSSProperties, useLayoutEffect, useRef, useState } from 'react';
 import type { VesselState } from '~/fill/vessel-state';
-import { placeMarks, placeTags, vesselSize } from './vessel-places';
+import { placeMarks, vesselSize } from './vessel-places';
 
 /** The level and the line: supply, tire, target, cut-in and cut-out, readable without a number. */
 export function LiveVessel({ vessel, bare = false }: { vessel: VesselState; bare?: boolean }) {
@@ -12,10 +12,16 @@ export function LiveVessel({ vessel, bare = false }: { vessel: VesselState; bare
     '--middle': `${supply.middle}%`,
     '--tire': `${tire.height}%`,
   } as CSSProperties;
-  const tags = placeTags(vessel, heightPx);
   const size = bare ? 'bare' : vesselSize(heightPx);
   return (
-    <div className="vessel" data-size={size} style={places} ref={box} aria-hidden="true">
+    <div
+      className="vessel"
+      data-size={size}
+      data-above={above || undefined}
+      style={places}
+      ref={box}
+      aria-hidden="true"
+    >
       <div className="vessel-level" />
       {vessel.known && <div className={above ? 'vessel-head' : 'vessel-lack'} />}
       {vessel.marks.map((mark) => (
@@ -34,11 +40,11 @@ export function LiveVessel({ vessel, bare = false }: { vessel: VesselState; bare
         ))}
       {size !== 'bare' && (
         <>
-          <span className="vessel-tag vessel-tag-supply" style={{ bottom: `${tags.supply}px` }}>
+          <span className="vessel-tag vessel-tag-supply">
             <small>Supply</small>
             {supply.text}
           </span>
-          <span className="vessel-tag vessel-tag-tire" style={{ bottom: `${tags.tire}px` }}>
+          <span className="vessel-tag vessel-tag-tire">
             <small>Tire</small>
             {tire.text}
           </span>

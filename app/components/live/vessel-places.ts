@@ -1,8 +1,6 @@
-import type { VesselMark, VesselState } from '~/fill/vessel-state';
+import type { VesselMark } from '~/fill/vessel-state';
 
-/** Height of a tag, of one in a low vessel, and of a mark's text, px: what has to stay clear. */
-const usualTagPx = 32;
-const lowTagPx = 24;
+/** Height of a mark's text, px: what has to stay clear of its neighbour. */
 const markPx = 20;
 
 /** Below these heights of a vessel its tags are small, or there is no room for any, px. */
@@ -30,27 +28,6 @@ export function placeMarks(marks: readonly VesselMark[], heightPx: number): Vess
     if (inside && free) placed.push(mark);
   }
   return placed;
-}
-
-/**
- * Where the two tags stand, px from the vessel's foot to their middle: the supply's on its level
- * but clear of the line, the tire's on the other side of the line.
- */
-export function placeTags(
-  { supply, tire, above }: VesselState,
-  heightPx: number,
-): { supply: number; tire: number } {
-  const line = toPx(tire.height, heightPx);
-  const level = toPx(supply.middle, heightPx);
-  const tagPx = vesselSize(heightPx) === 'low' ? lowTagPx : usualTagPx;
-  const clear = tagPx / 2 + 6;
-  const supplyAt = above ? Math.max(level, line + clear) : Math.min(level, line - clear);
-  const tireAt = above ? line - clear : line + clear;
-  return { supply: within(supplyAt, heightPx, tagPx), tire: within(tireAt, heightPx, tagPx) };
-}
-
-function within(px: number, heightPx: number, tagPx: number): number {
-  return Math.min(Math.max(px, tagPx / 2 + 2), Math.max(tagPx / 2, heightPx - tagPx / 2));
 }
 
 function toPx(percent: number, heightPx: number): number {

@@ -60,8 +60,8 @@ export function CycleDrawing() {
         </g>
       </svg>
       <figcaption>
-        Dark: headroom, air goes in. Hatched: the supply is below the tire, air would come out. The
-        figure shows the shape of the cycle, not a measured one.
+        Filled: headroom, air goes in. Hatched: the supply is below the tire, air would come out.
+        The figure shows the shape of the cycle, not a measured one.
       </figcaption>
     </figure>
   );

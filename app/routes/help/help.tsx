@@ -36,7 +36,7 @@ export default function Help() {
       <h2>What the picture means</h2>
       <p>
         The level is the supply. Its edge is soft by as much as it is not known. The hard line is
-        your tire. Dark above the line is headroom. Hatched below it is what is missing.
+        your tire. Filled above the line is headroom. Hatched below it is what is missing.
       </p>
       <p>
         A filled panel says that the chuck belongs on. A framed one says that it belongs off. A

@@ -4,25 +4,24 @@ export function RigDrawing() {
     <figure className="drawing">
       <svg viewBox="0 0 640 380" role="img" aria-labelledby="rig-title">
         <title id="rig-title">
-          From the coach’s fitting: connector, hose, ball valve, tee with gauge, a metre and a half
+          From the coach’s fitting: connector, hose, tee with gauge, ball valve, a metre and a half
           of hose, clip-on chuck, valve stem.
         </title>
         <g fill="none" stroke="var(--ink)" strokeWidth="3">
           {/* coach wall and fitting */}
-          <path d="M24 40 V170" strokeWidth="8" />
-          <path d="M28 104 H52 M52 94 H74 V114 H52 Z" />
-          {/* hose to the valve */}
-          <path d="M74 104 C130 104 120 104 176 104" strokeWidth="7" />
-          {/* ball valve: body, handle across the hose when shut */}
-          <path d="M176 90 H216 V118 H176 Z" fill="var(--paper)" />
-          <path d="M196 90 V66 M180 66 H230" />
-          {/* tee and gauge */}
-          <path d="M216 104 H256" strokeWidth="7" />
-          <path d="M256 88 H300 V120 H256 Z" fill="var(--paper)" />
-          <path d="M278 88 V72" />
-          <rect x="246" y="28" width="64" height="44" fill="var(--paper)" />
+          <path d="M24 70 V200" strokeWidth="8" />
+          <path d="M28 134 H52 M52 124 H74 V144 H52 Z" />
+          {/* hose to the tee and its gauge */}
+          <path d="M74 134 H166" strokeWidth="7" />
+          <path d="M166 118 H210 V150 H166 Z" fill="var(--paper)" />
+          <path d="M188 118 V100" />
+          <rect x="156" y="56" width="64" height="44" fill="var(--paper)" />
+          {/* ball valve below the gauge, its handle along the hose: open */}
+          <path d="M210 134 H262" strokeWidth="7" />
+          <path d="M262 120 H302 V148 H262 Z" fill="var(--paper)" />
+          <path d="M282 148 V166 M264 166 H322" />
           {/* a metre and a half of hose */}
-          <path d="M300 104 C420 104 452 130 452 180 S430 268 500 268" strokeWidth="7" />
+          <path d="M302 134 C400 134 424 150 424 200 S430 268 500 268" strokeWidth="7" />
           {/* chuck on the stem */}
           <path d="M500 252 H546 V284 H500 Z" fill="var(--paper)" />
           <path d="M512 252 L504 226 H530" />
@@ -34,28 +33,34 @@ export function RigDrawing() {
         <path d="M570 250 H638" stroke="var(--paper)" strokeWidth="10" />
         <path d="M570 250 H638" stroke="var(--ink)" strokeWidth="5" />
         <g className="drawing-text">
-          <text x="278" y="57" textAnchor="middle" fontWeight="700">
+          <text x="188" y="85" textAnchor="middle" fontWeight="700">
             108
           </text>
-          <text x="36" y="34">
+          <text x="16" y="56">
             coach’s fitting
           </text>
-          <text x="36" y="146">
-            connector that matches
+          <text x="40" y="190">
+            connector
           </text>
-          <text x="158" y="52" textAnchor="middle">
-            ball valve
+          <text x="40" y="212">
+            that matches
           </text>
-          <text x="322" y="46">
+          <text x="234" y="85">
             tee with gauge, 160 psi or more
           </text>
-          <text x="440" y="190" textAnchor="end">
-            1.5 m of hose, 200 psi or more
+          <text x="292" y="190" textAnchor="middle">
+            ball valve
           </text>
-          <text x="490" y="244" textAnchor="end">
+          <text x="444" y="172">
+            1.5 m of hose,
+          </text>
+          <text x="444" y="194">
+            200 psi or more
+          </text>
+          <text x="522" y="312" textAnchor="end">
             clip-on chuck, closed
           </text>
-          <text x="602" y="368" textAnchor="middle">
+          <text x="604" y="368" textAnchor="middle">
             tire
           </text>
         </g>

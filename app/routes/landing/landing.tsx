@@ -31,8 +31,8 @@ export default function Landing() {
         <div>
           <h2>A level and a line</h2>
           <p>
-            The level is the coach’s supply. The line is your tire. Dark above the line is headroom;
-            hatched below it is what is missing.
+            The level is the coach’s supply. The line is your tire. Filled above the line is
+            headroom; hatched below it is what is missing.
           </p>
         </div>
         <div>
