@@ -8,9 +8,8 @@ const FAST_IDLE_LIKELY = 0.55;
 export function cabCall(s: Situation, decision: Decision): CabCall {
   const { facts, belief } = s;
   if (decision.call === 'done' || decision.call === 'cannot-reach') return 'nothing';
-  if (decision.by === 'pedal' && decision.call === 'lower-supply') return 'lower-supply';
-  if (decision.call === 'stop-lowering')
-    return facts.lowering === 'pedal' ? 'stop-lowering' : 'nothing';
+  // Whoever is free lowers, by pedal or by drain: both screens say so.
+  if (decision.call === 'lower-supply' || decision.call === 'stop-lowering') return decision.call;
   if (facts.speed === 'off') return 'start-engine';
   if (facts.speed !== 'fast-idle') return 'set-fast-idle';
   if (!facts.lowering && facts.pedalSinceSpeed && belief.fastIdle < FAST_IDLE_LIKELY)

@@ -6,13 +6,19 @@ import { costOf, type Goal, rollOut, sampleFor } from './forecast';
 import { lowestSupply, planGoal } from './plan';
 import { evenSpread } from './spread';
 
-/** Lowering is asked for only while the compressor is hardly loaded. */
+/** Lowering is asked for only while the compressor is hardly loaded, and stopped when it is. */
 const LOADED_LITTLE = 0.25;
 const LOADED_LIKELY = 0.55;
+/** A supply known no better than this is read before anything else is said, kPa (p90 − p10). */
+const UNKNOWN_KPA = 70;
+/** The chuck goes on where air is this likely to flow in when hands have done it. */
+const FLOWS_LIKELY = 0.7;
+/** What a shown call is worth over a change of mind, s. */
+const STANDS_S = 6;
 
 export function callWhileOff(s: Situation): Decision {
   const { facts, belief, setup } = s;
-  if (facts.lowering) return whileLowering(s);
+  if (facts.lowering && !handsAreOff(s)) return whileLowering(s);
   if (needsGauge(s)) return { call: 'gauge-tire', reason: 'prove-it' };
   const reach = cannotReach(s);
   if (reach) return reach;
@@ -20,11 +26,8 @@ export function callWhileOff(s: Situation): Decision {
     return { call: 'read-supply', reason: 'supply-unknown' };
   }
   if (facts.speed === 'off' && belief.flowsIn < 0.5) return { call: 'wait', reason: 'engine-off' };
-  if (
-    belief.supply.p90 - belief.supply.p10 > 70 &&
-    belief.flowsIn < 0.95 &&
-    belief.flowsIn > 0.05
-  ) {
+  const unsure = belief.flowsIn < 0.95 && belief.flowsIn > 0.05;
+  if (unsure && belief.supply.p90 - belief.supply.p10 > UNKNOWN_KPA) {
     return { call: 'read-supply', reason: 'supply-unsure' };
   }
   return choosePlan(s, planGoal(s));
@@ -33,8 +36,9 @@ export function callWhileOff(s: Situation): Decision {
 /** Gauge when the tire may be there already, or is known too badly to time the next hold. */
 function needsGauge(s: Situation): boolean {
   const { facts, belief, setup } = s;
+  const touched = lastTouched(facts);
   const last = facts.gauged[facts.gauged.length - 1];
-  if (lastTouched(facts) < 0 || (last && last.at >= lastTouched(facts))) return false;
+  if (touched < 0 || (last && last.at >= touched)) return false;
   const { targetKpa, toleranceKpa } = setup.tire;
   if (belief.tire.p90 >= targetKpa - toleranceKpa) return true;
   return belief.tire.p90 - belief.tire.p10 > toleranceKpa;
@@ -49,58 +53,88 @@ function cannotReach(s: Situation): Decision | undefined {
   return { call: 'cannot-reach', reason: 'governor-too-low', reachKpa: belief.cutOut };
 }
 
+/** A stop that was not tapped: the ensemble believes that nobody lowers any more. */
+function handsAreOff(s: Situation): boolean {
+  return chance(s.e, (i) => s.e.members.idleHands[i] === 1) > 0.75;
+}
+
 function whileLowering(s: Situation): Decision {
-  const { facts, belief } = s;
-  const stop = (reason: Decision['reason']): Decision => ({
-    call: 'stop-lowering',
-    reason,
-    by: facts.lowering,
-  });
+  const { facts, belief, e } = s;
+  const by = facts.lowering;
+  const stop = (reason: Decision['reason']): Decision => ({ call: 'stop-lowering', reason, by });
   if (facts.lowAir) return stop('supply-too-low');
   if (belief.loaded >= LOADED_LIKELY) return stop('cut-in-likely');
   if (belief.supply.p50 <= lowestSupply(s)) return stop('low-enough');
-  const outcome = rollOut(
-    sampleFor(s.e),
-    'lower',
-    { ...planGoal(s), hands: { ...planGoal(s).hands, toLowering: 0 } },
-    s.e.controls.atmosphereKpa,
-  );
+  const ahead = rollOut(sampleFor(e), 'go-on-lowering', planGoal(s), e.controls.atmosphereKpa);
   return {
     call: 'lower-supply',
     reason: 'lower-to-cut-in',
-    by: facts.lowering,
-    changeIn: evenSpread(outcome.change),
+    by,
+    changeIn: evenSpread(ahead.change),
   };
 }
 
+interface Weighed {
+  call: 'chuck-on' | 'wait' | 'lower-supply';
+  cost: number;
+  decision: Decision;
+}
+
+/** Runs the ensemble ahead under each plan that is open, and takes the one that is done soonest. */
 function choosePlan(s: Situation, goal: Goal): Decision {
-  const { belief, facts } = s;
-  const atmosphere = s.e.controls.atmosphereKpa;
-  const sample = sampleFor(s.e);
+  const { facts, e } = s;
+  const atmosphere = e.controls.atmosphereKpa;
+  const sample = sampleFor(e);
   const wait = rollOut(sample, 'wait', goal, atmosphere);
   const now = rollOut(sample, 'on-now', goal, atmosphere);
-  const mayLower =
-    goal.by !== undefined &&
-    belief.loaded < LOADED_LITTLE &&
-    belief.supply.p50 > goal.lowestAbs - atmosphere;
-  const lower = mayLower ? rollOut(sample, 'lower', goal, atmosphere) : undefined;
-  const costWait = costOf(wait);
-  const costNow = costOf(now);
-  const costLower = lower ? costOf(lower) : Number.POSITIVE_INFINITY;
-  if (facts.atSeat && !facts.helper && costNow <= costWait + 1)
-    return { call: 'wait', reason: 'not-at-the-wheel' };
   const waitIn = evenSpread(wait.change);
-  if ((costNow <= costWait + 1 || waitIn.p50 <= goal.hands.putOn * 0.5) && costNow <= costLower) {
-    return { call: 'chuck-on', reason: 'supply-above-tire', changeIn: evenSpread(now.change) };
+  const waits: Decision = { call: 'wait', reason: waitReason(s), changeIn: waitIn };
+  const puts: Decision = {
+    call: 'chuck-on',
+    reason: 'supply-above-tire',
+    changeIn: evenSpread(now.change),
+  };
+  const atOnce = waitIn.p50 <= 0.5 * goal.hands.putOn;
+  const worthIt = atOnce || puts.changeIn!.p50 > goal.hands.putOn + 3;
+  const flows = meanOf(now.flowed) >= FLOWS_LIKELY;
+  const plans: Weighed[] = [{ call: 'wait', cost: costOf(wait) + 1, decision: waits }];
+  if (flows && worthIt) {
+    const cost = Math.min(costOf(now), atOnce ? costOf(wait) : costOf(now));
+    plans.push({ call: 'chuck-on', cost, decision: puts });
   }
-  if (lower && costLower < costWait - 3) {
-    return { call: 'lower-supply', reason: 'lower-to-cut-in', by: goal.by };
+  if (mayLower(s, goal)) {
+    const lower = rollOut(sample, 'lower', goal, atmosphere);
+    plans.push({
+      call: 'lower-supply',
+      cost: costOf(lower) + 2,
+      decision: { call: 'lower-supply', reason: 'lower-to-cut-in', by: goal.by },
+    });
   }
-  const reason =
-    belief.flowsIn > 0.5
-      ? 'supply-about-to-fall'
-      : belief.loaded > 0.5
-        ? 'supply-below-tire'
-        : 'wait-for-cut-in';
-  return { call: 'wait', reason, changeIn: evenSpread(wait.change) };
+  const best = soonest(s, plans);
+  if (best.call === 'chuck-on' && facts.atSeat && !facts.helper) {
+    return { ...waits, reason: 'not-at-the-wheel' };
+  }
+  return best.decision;
+}
+
+function meanOf(values: Float64Array): number {
+  let sum = 0;
+  for (let i = 0; i < values.length; i++) sum += values[i]!;
+  return sum / values.length;
+}
+
+function soonest(s: Situation, plans: Weighed[]): Weighed {
+  const cost = (plan: Weighed) => plan.cost - (plan.call === s.facts.shown ? STANDS_S : 0);
+  return plans.reduce((best, plan) => (cost(plan) < cost(best) ? plan : best));
+}
+
+/** Never while the compressor may be loaded, nor below cut-in less 3 psi, nor under 80 psi. */
+function mayLower(s: Situation, goal: Goal): boolean {
+  if (!goal.by || s.belief.loaded >= LOADED_LITTLE || s.facts.lowering) return false;
+  return s.belief.supply.p50 > goal.lowestAbs - s.e.controls.atmosphereKpa;
+}
+
+function waitReason(s: Situation): Decision['reason'] {
+  if (s.belief.flowsIn > 0.5) return 'supply-about-to-fall';
+  return s.belief.loaded > 0.5 ? 'supply-below-tire' : 'wait-for-cut-in';
 }

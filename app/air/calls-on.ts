@@ -1,46 +1,52 @@
 /** The chuck is on: keep it, or take it off. */
-
 import type { Decision, Situation } from './advise';
 import { chance } from './belief';
-import { sourceAbs } from './coach';
-import { costOf, rollOut, sampleFor } from './forecast';
+import { costOf, type Goal, rollOut, sampleFor } from './forecast';
 import { planGoal } from './plan';
 import { evenSpread } from './spread';
 
-/** Chance of ending over the tolerance that is accepted while the hold goes on. */
+/** Chance of ending over the tolerance, and over the limit, at which a hold is ended. */
 const OVER_ACCEPTED = 0.06;
 const OVER_LIMIT_ACCEPTED = 0.08;
+/** Chance of air going out at which a hold on a falling supply is ended. */
+const OUTFLOW_ACCEPTED = 0.3;
+/** A call to take it off stands for this long once it was shown, s. */
+const STICKS_S = 12;
 
 export function callWhileOn(s: Situation): Decision {
   const { e, setup, facts } = s;
-  const m = e.members;
   const { targetKpa, toleranceKpa, limitKpa } = setup.tire;
   const goal = planGoal(s);
-  const react = goal.hands.takeOff;
-  const atmosphere = e.controls.atmosphereKpa;
-  if (facts.lowAir) return { call: 'chuck-off', reason: 'supply-at-tire' };
-  const then = (i: number) =>
-    m.tireAbs[i]! + (Math.max(0, m.flow[i]!) / m.tireL[i]!) * react - atmosphere;
+  const then = (i: number) => gaugeAfter(s, i, goal.hands.takeOff);
+  const off = (reason: Decision['reason']): Decision => ({ call: 'chuck-off', reason });
+  if (facts.lowAir) return off('supply-at-tire');
   if (limitKpa !== undefined && chance(e, (i) => then(i) > limitKpa) > OVER_LIMIT_ACCEPTED) {
-    return { call: 'chuck-off', reason: 'near-limit' };
+    return off('near-limit');
   }
   const reached = chance(e, (i) => then(i) >= targetKpa - 0.25 * toleranceKpa);
-  if (reached >= 0.5) return { call: 'chuck-off', reason: 'target-reached' };
+  if (reached >= 0.5) return off('target-reached');
   const over = chance(e, (i) => then(i) > targetKpa + 0.9 * toleranceKpa);
-  if (over > OVER_ACCEPTED) return { call: 'chuck-off', reason: 'gauge-to-be-sure' };
-  const below = chance(
-    e,
-    (i) => sourceAbs(m, i) < m.tireAbs[i]! + m.warmth[i]! && m.loaded[i] === 0,
-  );
-  if (below > 0.3) return { call: 'chuck-off', reason: 'supply-at-tire' };
+  if (over > OVER_ACCEPTED) return off('gauge-to-be-sure');
+  const out = chance(e, (i) => e.members.flow[i]! < 0 && e.members.loaded[i] === 0);
+  if (out > OUTFLOW_ACCEPTED) return off('supply-at-tire');
   return keepOrCycle(s, goal);
 }
 
-function keepOrCycle(s: Situation, goal: ReturnType<typeof planGoal>): Decision {
+/** Settled gauge pressure of a member's tire when hands have taken the chuck off. */
+function gaugeAfter(s: Situation, i: number, seconds: number): number {
+  const m = s.e.members;
+  const gain = Math.max(0, m.flow[i]!) / m.tireL[i]!;
+  return m.tireAbs[i]! + gain * seconds - s.e.controls.atmosphereKpa;
+}
+
+function keepOrCycle(s: Situation, goal: Goal): Decision {
   const atmosphere = s.e.controls.atmosphereKpa;
   const sample = sampleFor(s.e);
   const keep = rollOut(sample, 'keep-on', goal, atmosphere);
   const changeIn = evenSpread(keep.change);
+  const saidOff = s.facts.shown === 'chuck-off' && s.at - s.facts.shownAt < STICKS_S;
+  if (saidOff && changeIn.p50 < 6) return { call: 'chuck-off', reason: 'cycle-again' };
+  if (changeIn.p50 <= 1) return { call: 'chuck-off', reason: 'supply-at-tire' };
   if (s.belief.loaded < 0.4) {
     const off = rollOut(sample, 'off-now', goal, atmosphere);
     if (costOf(off) < costOf(keep) - 2) return { call: 'chuck-off', reason: 'cycle-again' };

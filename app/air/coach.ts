@@ -16,6 +16,7 @@ const STATE_FIELDS = [
   'path', // one of PATH
   'flow', // kPa·L/s into the tire, negative: out of it
   'drift', // kPa/s of the tank that the fitting sits on
+  'idleHands', // 1: nobody lowers the supply although the log says so
   'doubt', // variance of the supply by what the model leaves out, kPa²
 ] as const;
 
@@ -128,8 +129,9 @@ export function step(m: Members, from: number, to: number, h: number, controls: 
     supply = atmosphere + (supply - atmosphere) * kept;
     service = atmosphere + (service - atmosphere) * kept;
     accessory = atmosphere + (accessory - atmosphere) * kept;
-    if (pedal) service = Math.max(atmosphere, service - m.pedalKpaS[i]! * h);
-    if (drain) {
+    const lowers = m.idleHands[i] === 0;
+    if (pedal && lowers) service = Math.max(atmosphere, service - m.pedalKpaS[i]! * h);
+    if (drain && lowers) {
       const out = m.drainC[i]! * supply * ANR * flowShare(atmosphere / supply) * h;
       supply = Math.max(atmosphere, supply - out / supplyL);
     }

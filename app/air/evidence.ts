@@ -267,6 +267,7 @@ export function takeChuckOff(e: Ensemble): void {
 export function takeLowering(e: Ensemble, by: 'pedal' | 'drain', on: boolean): void {
   const m = e.members;
   e.controls[by] = on;
+  e.members.idleHands.fill(0);
   if (by !== 'pedal' || !on) return;
   for (let i = 0; i < m.n; i++) {
     if (m.pedalDropsIdle[i] === 1 && m.speed[i] === SPEED['fast-idle']) m.speed[i] = SPEED.idle;

@@ -1,5 +1,5 @@
 /** What the log says outright, as against what the ensemble believes. */
-import type { EngineSpeed, FillEvent, FillSetup, LowerBy } from './contract';
+import type { Call, EngineSpeed, FillEvent, FillSetup, LowerBy } from './contract';
 
 export interface SeenReading {
   at: number;
@@ -34,6 +34,9 @@ export interface Facts {
   gauged: { at: number; kpa: number }[];
   cutOuts: number[];
   cutIns: number[];
+  /** The call that the screen last said, and since when. */
+  shown: Call | undefined;
+  shownAt: number;
   /** Seconds from a shown "take it off" to the tap, latest last. */
   reactions: number[];
 }
@@ -59,11 +62,15 @@ export function readFacts(events: readonly FillEvent[], setup: FillSetup): Facts
     gauged: [],
     cutOuts: [],
     cutIns: [],
+    shown: undefined,
+    shownAt: NEVER,
     reactions: [],
   };
   let offShownAt = NEVER;
   for (const event of events) {
     if (event.type === 'call-shown') {
+      facts.shown = event.call;
+      facts.shownAt = event.at;
       if (event.call === 'chuck-off' && offShownAt === NEVER) offShownAt = event.at;
       else if (event.call !== 'chuck-off') offShownAt = NEVER;
       continue;

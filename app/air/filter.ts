@@ -18,7 +18,7 @@ import {
   takeTireReading,
 } from './evidence';
 import { startEnsemble } from './profile';
-import { wander } from './renewal';
+import { restHands, wander } from './renewal';
 
 export const MEMBERS = 640;
 /** The grid, s. */
@@ -27,7 +27,7 @@ export const GRID_S = 0.5;
 const IDLE_AFTER_S = 600;
 const IDLE_GRID_S = 2;
 const SILENCE_EVERY_S = 2;
-const WANDER_EVERY_S = 4;
+const WANDER_EVERY_S = 2;
 const CHECKPOINT_EVERY_S = 20;
 const MOST_CHECKPOINTS = 48;
 
@@ -108,7 +108,10 @@ function advance(
       continue;
     }
     if (goal % SILENCE_EVERY_S === 0) takeSilence(e, SILENCE_EVERY_S);
-    if (goal % WANDER_EVERY_S === 0) wander(e, WANDER_EVERY_S);
+    if (goal % WANDER_EVERY_S === 0) {
+      wander(e, WANDER_EVERY_S);
+      restHands(e, WANDER_EVERY_S);
+    }
     atGrid();
   }
 }

@@ -10,11 +10,23 @@ import type { LowerBy } from './contract';
 import type { Ensemble } from './ensemble';
 import { pickByWeight } from './renewal';
 
-export const ROLLOUT_MEMBERS = 32;
-const ROLLOUT_STEP_S = 1;
-export const HORIZON_S = 300;
+export const ROLLOUT_MEMBERS = 24;
+/** Steps of a rollout: fine while the next call depends on it, coarser after. */
+const FINE_STEP_S = 1;
+const FINE_UNTIL_S = 24;
+const COARSE_STEP_S = 2;
+const COARSE_UNTIL_S = 90;
+const COARSEST_STEP_S = 4;
+export const HORIZON_S = 420;
 
-export type Plan = 'on-now' | 'wait' | 'lower' | 'stop-lowering' | 'keep-on' | 'off-now';
+export type Plan =
+  | 'on-now'
+  | 'wait'
+  | 'lower'
+  | 'go-on-lowering'
+  | 'stop-lowering'
+  | 'keep-on'
+  | 'off-now';
 
 /** What hands need, s. */
 export interface Hands {
@@ -42,14 +54,16 @@ export interface Outcome {
   change: Float64Array;
   done: Float64Array;
   lost: Float64Array;
+  /** 1 where the supply stood above the tire when the chuck first went on. */
+  flowed: Float64Array;
 }
 
 /** Gain a second, kPa, under which a hold on a falling supply is given up. */
-const LEAST_GAIN = 0.06;
+const LEAST_GAIN = { whereLowered: 0.2, elsewhere: 0.03 };
 /** The supply must stand this much above the tire before the chuck goes on, kPa. */
 export const MARGIN_KPA = 1.5;
 /** A tire that is still low at the end is charged this much time a kPa. */
-const SECONDS_PER_KPA = 8;
+const SECONDS_PER_KPA = 5;
 
 const PHASE = {
   waiting: 0,
@@ -83,11 +97,13 @@ export function createOutcome(): Outcome {
     change: new Float64Array(ROLLOUT_MEMBERS),
     done: new Float64Array(ROLLOUT_MEMBERS),
     lost: new Float64Array(ROLLOUT_MEMBERS),
+    flowed: new Float64Array(ROLLOUT_MEMBERS),
   };
 }
 
 export function rollOut(sample: Members, plan: Plan, goal: Goal, atmosphereKpa: number): Outcome {
   work.all.set(sample.all);
+  if (plan !== 'go-on-lowering') work.idleHands.fill(0);
   const outcome = createOutcome();
   const still: Controls = { pedal: false, drain: false, bleeding: false, atmosphereKpa };
   const lowering: Controls = { ...still, [goal.by ?? 'drain']: true };
@@ -100,6 +116,7 @@ function firstPhase(plan: Plan): Phase {
   if (plan === 'keep-on') return PHASE.on;
   if (plan === 'off-now') return PHASE.takingOff;
   if (plan === 'lower') return PHASE.goingToLower;
+  if (plan === 'go-on-lowering') return PHASE.lowering;
   return plan === 'stop-lowering' ? PHASE.comingBack : PHASE.waiting;
 }
 
@@ -125,23 +142,33 @@ function runMember(
   const first = phase;
   let left = lasting(phase, goal.hands);
   let change = -1;
+  let onAt = -1;
   let lost = 0;
   let t = 0;
   const openPath = m.path[i] === PATH.off ? PATH.seated : m.path[i]!;
   if (phase === PHASE.waiting || phase >= PHASE.goingToLower) m.path[i] = PATH.off;
-  for (; t < HORIZON_S; t += ROLLOUT_STEP_S) {
-    const next = nextPhase(m, i, phase, left, goal);
+  let h = FINE_STEP_S;
+  for (; t < HORIZON_S; t += h) {
+    h = t < FINE_UNTIL_S ? FINE_STEP_S : t < COARSE_UNTIL_S ? COARSE_STEP_S : COARSEST_STEP_S;
+    // A hold that has just begun has no flow yet to judge it by.
+    const next = t === 0 && phase === PHASE.on ? phase : nextPhase(m, i, phase, left, goal);
     if (next !== phase) {
       if (change < 0 && !(plan === 'on-now' && first === phase)) change = t;
       if (phase === PHASE.gauging && next === PHASE.on) break;
       phase = next;
       left = lasting(phase, goal.hands);
-      if (phase === PHASE.on) m.path[i] = openPath;
+      if (phase === PHASE.on) {
+        m.path[i] = openPath;
+        if (onAt < 0) {
+          onAt = t;
+          outcome.flowed[i] = sourceAbs(m, i) > m.tireAbs[i]! + m.warmth[i]! ? 1 : 0;
+        }
+      }
       if (phase !== PHASE.on && phase !== PHASE.takingOff) m.path[i] = PATH.off;
     }
-    step(m, i, i + 1, ROLLOUT_STEP_S, phase === PHASE.lowering ? lowering : still);
-    if (m.flow[i]! < 0) lost -= m.flow[i]! / m.tireL[i]!;
-    left -= ROLLOUT_STEP_S;
+    step(m, i, i + 1, h, phase === PHASE.lowering ? lowering : still);
+    if (m.flow[i]! < 0) lost -= (m.flow[i]! * h) / m.tireL[i]!;
+    left -= h;
   }
   const short = Math.max(0, goal.enoughAbs - m.tireAbs[i]!);
   outcome.change[i] = change < 0 ? HORIZON_S : change;
@@ -178,7 +205,11 @@ function endsHold(m: Members, i: number, goal: Goal): boolean {
   const gain = m.flow[i]! / m.tireL[i]!;
   if (m.tireAbs[i]! + gain * goal.hands.takeOff >= goal.aimAbs) return true;
   if (sourceAbs(m, i) < m.tireAbs[i]! + m.warmth[i]! && m.loaded[i] === 0) return true;
-  return m.loaded[i] === 0 && m.sinceSwitch[i]! > 1 && gain < LEAST_GAIN;
+  return (
+    m.loaded[i] === 0 &&
+    m.sinceSwitch[i]! > 1 &&
+    gain < (goal.by ? LEAST_GAIN.whereLowered : LEAST_GAIN.elsewhere)
+  );
 }
 
 /** Mean time to done, with lost air charged. */

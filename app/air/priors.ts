@@ -7,7 +7,10 @@ import { FITTING, type Members, PATH, SPEED, seriesC } from './coach';
 
 export const KPA_PER_PSI = 6.894757293168361;
 
-/** One draw in this many comes from far outside the usual range. */
+/** "A gauge is wrong by one and a half psi or so and always the same way" (common practice). */
+export const WHEEL_BIAS_KPA = 1.5 * KPA_PER_PSI;
+
+/** This share of the draws comes from far outside the usual range. */
 const TAIL_SHARE = 0.06;
 
 /** Draws all lasting parameters of member i from the broad prior. */
@@ -27,7 +30,7 @@ export function drawLasting(m: Members, i: number, draws: Draws): void {
   m.hoseC[i] = lognormal(draws, 1.25, 0.4);
   m.chuckC[i] = lognormal(draws, 0.24, 0.55);
   m.gaugeShare[i] = uniformBetween(draws, 0.35, 1);
-  m.wheelBias[i] = normal(draws) * 1.5 * KPA_PER_PSI;
+  m.wheelBias[i] = normal(draws) * WHEEL_BIAS_KPA;
   m.dashBias[i] = normal(draws) * 3.2 * KPA_PER_PSI;
   m.pedalDropsIdle[i] = uniform(draws) < 0.5 ? 1 : 0;
   m.purgeKpa[i] = uniform(draws) < 0.4 ? uniformBetween(draws, 0.3, 3) * KPA_PER_PSI : 0;

@@ -8,7 +8,7 @@ import { createMembers, type Field, LASTING_FIELDS, type Members } from './coach
 import type { FillSetup } from './contract';
 import { Ensemble } from './ensemble';
 import { drawLasting, drawSupply, drawWheel, reconcileGovernor } from './priors';
-import { jitterMember, LEAST_WIDTHS, pickByWeight } from './renewal';
+import { jitterMember, LEAST_WIDTHS, pickByWeight, type Widths } from './renewal';
 
 export const PROFILE_SCHEMA = 1;
 const KEPT_MEMBERS = 64;
@@ -45,8 +45,16 @@ const SUPPLY_FIELDS: readonly Field[] = [
 ];
 
 /** Share of members at the start of a fill that come from each source; the rest is broad prior. */
-const FROM_SUPPLY = 0.86;
-const FROM_PROFILE = 0.84;
+const FROM_SUPPLY = 0.78;
+const FROM_PROFILE = 0.8;
+
+/** Old knowledge fades: what is taken over is spread a little. */
+const CARRIED_WIDTHS: Widths = {
+  scaled: LEAST_WIDTHS.scaled.map((width) => 2 * width),
+  core: 0.05,
+  cutIn: 3,
+  cutOut: 3,
+};
 
 function keyOf(rig: FillSetup['rig']): RigKey {
   return { hose: rig?.hose, chuck: rig?.chuck, gauge: rig?.gaugeName };
@@ -111,7 +119,7 @@ export function startEnsemble(n: number, setup: FillSetup): Ensemble {
     const row = uniform(e.draws);
     if (supply && pick < FROM_SUPPLY) {
       readInto(m, i, supply, Math.floor(row * supply.members.length));
-      jitterMember(m, i, e.draws, LEAST_WIDTHS);
+      jitterMember(m, i, e.draws, CARRIED_WIDTHS);
     } else if (profile && pick < FROM_PROFILE) {
       takeProfile(e, i, setup, Math.floor(row * profile.members.length));
     }
@@ -151,5 +159,5 @@ function takeProfile(e: Ensemble, i: number, setup: FillSetup, row: number): voi
   if (now.chuck !== profile.key.chuck) m.chuckC[i] = fresh.chuckC;
   if (now.gauge !== profile.key.gauge) m.wheelBias[i] = fresh.wheelBias;
   m.deadCompressor[i] = 0;
-  jitterMember(m, i, e.draws, LEAST_WIDTHS);
+  jitterMember(m, i, e.draws, CARRIED_WIDTHS);
 }

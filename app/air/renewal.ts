@@ -5,7 +5,7 @@
 import { type Draws, exp, normal, uniform } from './arithmetic';
 import { copyMember, createMembers, type LastingField, type Members } from './coach';
 import type { Ensemble } from './ensemble';
-import { drawLasting, drawWheel, KPA_PER_PSI, reconcileGovernor } from './priors';
+import { drawLasting, drawWheel, KPA_PER_PSI, reconcileGovernor, WHEEL_BIAS_KPA } from './priors';
 
 /** Resample when fewer than this share of the members carries the weight. */
 const LEAST_EFFECTIVE = 0.5;
@@ -66,10 +66,29 @@ export function jitterMember(m: Members, i: number, draws: Draws, widths: Widths
   m.pathC[i] = m.pathC[i]! * core;
   m.cutInKpa[i] = m.cutInKpa[i]! + widths.cutIn * normal(draws);
   m.cutOutKpa[i] = m.cutOutKpa[i]! + widths.cutOut * normal(draws);
-  m.wheelBias[i] = m.wheelBias[i]! + 0.6 * normal(draws);
-  m.dashBias[i] = m.dashBias[i]! + 1.2 * normal(draws);
+  turnBias(m, i, draws);
   const share = m.gaugeShare[i]! + 0.02 * normal(draws);
   m.gaugeShare[i] = Math.min(1, Math.max(0.1, share));
+}
+
+/** How much of a gauge's error a copy keeps. */
+const BIAS_KEPT = 0.93;
+const BIAS_DRAWN = Math.sqrt(1 - BIAS_KEPT * BIAS_KEPT);
+
+/**
+ * No reading of a gauge tells its error: resampling alone would settle on one by chance. A move
+ * along that direction, error against supply and governor, leaves readings and prior as they are.
+ */
+function turnBias(m: Members, i: number, draws: Draws): void {
+  const wheel = BIAS_KEPT * m.wheelBias[i]! + BIAS_DRAWN * WHEEL_BIAS_KPA * normal(draws);
+  const change = m.wheelBias[i]! - wheel;
+  m.wheelBias[i] = wheel;
+  m.dashBias[i] = m.dashBias[i]! - change;
+  m.supplyAbs[i] = m.supplyAbs[i]! + change;
+  m.serviceAbs[i] = m.serviceAbs[i]! + change;
+  m.accessoryAbs[i] = m.accessoryAbs[i]! + change;
+  m.cutInKpa[i] = m.cutInKpa[i]! + change;
+  m.cutOutKpa[i] = m.cutOutKpa[i]! + change;
 }
 
 /** How far copies are moved apart: relative for what is scaled, kPa for the governor's points. */
@@ -153,14 +172,33 @@ export function refreshLasting(e: Ensemble, i: number): void {
 /** What the model leaves out: others draw air, pushes differ. kPa² a second at rest, and by rate. */
 const DOUBT_AT_REST = 0.15;
 const DOUBT_BY_RATE = 0.025;
+const DOUBT_LOWERING = 4;
+
+/** A forgotten "stop" tap: hands come off in about this time once there is nothing to lower for. */
+const HANDS_OFF_S = 7;
+const HANDS_OFF_UNASKED_S = 500;
+const ENOUGH_LOWERED_KPA = 78 * KPA_PER_PSI;
+
+/** While the log says that the supply is being lowered: members in which nobody does any more. */
+export function restHands(e: Ensemble, seconds: number): void {
+  if (!e.controls.pedal && !e.controls.drain) return;
+  const m = e.members;
+  for (let i = 0; i < m.n; i++) {
+    const low = m.supplyAbs[i]! - e.controls.atmosphereKpa < ENOUGH_LOWERED_KPA;
+    const asked = low || (m.loaded[i] === 1 && m.sinceSwitch[i]! > 4);
+    const chance = seconds / (asked ? HANDS_OFF_S : HANDS_OFF_UNASKED_S);
+    if (m.idleHands[i] === 0 && uniform(e.draws) < chance) m.idleHands[i] = 1;
+  }
+}
 
 /** The slow wandering of what is held constant: leaks come and go, other users draw air. */
 export function wander(e: Ensemble, seconds: number): void {
   const m = e.members;
+  const lowering = e.controls.pedal || e.controls.drain ? DOUBT_LOWERING : 0;
   const root = Math.sqrt(seconds);
   for (let i = 0; i < m.n; i++) {
     const drift = m.drift[i]!;
-    m.doubt[i] = m.doubt[i]! + (DOUBT_AT_REST + DOUBT_BY_RATE * drift * drift) * seconds;
+    m.doubt[i] = m.doubt[i]! + (DOUBT_AT_REST + lowering + DOUBT_BY_RATE * drift * drift) * seconds;
     m.tireAbs[i] =
       m.tireAbs[i]! + (0.01 + 0.03 * Math.abs(m.flow[i]! / m.tireL[i]!)) * root * normal(e.draws);
   }
