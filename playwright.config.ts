@@ -41,6 +41,7 @@ export default defineConfig({
   },
   projects: [
     { name: 'phone', use: { viewport: PHONE, hasTouch: true, isMobile: true } },
-    { name: 'desk', use: { viewport: DESK } },
+    // What people do at the tire is done on a phone.
+    { name: 'desk', testIgnore: /\.phone\.spec\.ts$/, use: { viewport: DESK } },
   ],
 });

@@ -1,0 +1,20 @@
+import type { Page } from '@playwright/test';
+
+/** Behind the real clock by this much at the start, so that the page never gets ahead of it. */
+const headStartMs = 45 * 60_000;
+
+/**
+ * Puts a page's clock into the test's hands, and the server's as that page sees it: the server's
+ * time in an answer is replaced by the page's own, as if both had waited.
+ */
+export async function holdClock(page: Page): Promise<void> {
+  await page.clock.install({ time: Date.now() - headStartMs });
+  await page.route('**/api/v1/**', async (route) => {
+    const now = await page.evaluate(() => Date.now());
+    const answer = await route.fetch();
+    await route.fulfill({
+      response: answer,
+      headers: { ...answer.headers(), 'x-server-time': String(now) },
+    });
+  });
+}
