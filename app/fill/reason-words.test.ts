@@ -4,14 +4,20 @@ import { nextOf, reasonWords, whyOf } from './reason-words';
 
 const figures = { target: '104.5 psi', tire: '101 psi', reach: '98 psi', valve: false };
 /** `check` and `cannot-reach`, as REASONS groups them. */
-const wantNext = [...REASONS.slice(REASONS.indexOf('supply-not-moving')), 'governor-too-low'] as const;
+const wantNext = [
+  ...REASONS.slice(REASONS.indexOf('supply-not-moving')),
+  'governor-too-low',
+] as const;
 
-test.each(REASONS)('%s has a line of at most twenty words, without an exclamation mark', (reason) => {
-  const why = whyOf(reason, figures);
-  expect(why.length).toBeGreaterThan(8);
-  expect(why.split(' ').length).toBeLessThanOrEqual(20);
-  expect(why).not.toContain('!');
-});
+test.each(REASONS)(
+  '%s has a line of at most twenty words, without an exclamation mark',
+  (reason) => {
+    const why = whyOf(reason, figures);
+    expect(why.length).toBeGreaterThan(8);
+    expect(why.split(' ').length).toBeLessThanOrEqual(20);
+    expect(why).not.toContain('!');
+  },
+);
 
 test.each(wantNext)('%s says what to do next', (reason) => {
   expect(nextOf(reason, false)).toMatch(/\.$/);
@@ -24,7 +30,9 @@ test('a title is one to three words', () => {
 });
 
 test('a shut-off valve is opened and closed, not put on and taken off', () => {
-  expect(whyOf('supply-below-tire', { ...figures, valve: true })).toBe('Open now would let air out.');
+  expect(whyOf('supply-below-tire', { ...figures, valve: true })).toBe(
+    'Open now would let air out.',
+  );
   expect(nextOf('low-air', true)).toBe('Close the valve. Stop lowering. Let the supply build up.');
 });
 

@@ -3,14 +3,16 @@ import { PressKey, type Stamp } from './press-key';
 export interface GaugeLabelProps {
   /** "Gauge at the wheel reads, psi" */
   label: string;
+  /** A reading is wanted now. */
+  isWanted: boolean;
   /** What a simulated gauge shows; a real one is read by the person. */
   shows?: string;
 }
 
 /** What the row of values stands for. */
-export function GaugeLabel({ label, shows }: GaugeLabelProps) {
+export function GaugeLabel({ label, isWanted, shows }: GaugeLabelProps) {
   return (
-    <h2 className="gauge-label">
+    <h2 className="gauge-label" data-wanted={isWanted || undefined}>
       <span>{label}</span>
       {shows && <b className="gauge-shows">{shows}</b>}
     </h2>

@@ -55,7 +55,15 @@ function Strip(props: KeysProps) {
       label={
         !ui.keypad &&
         state.body !== 'pedal-cautions' && (
-          <GaugeLabel label={labelOf(hoseGauge(setup), unit)} shows={shows?.hose} />
+          <GaugeLabel
+            label={
+              state.readNow
+                ? `${gaugeNames[hoseGauge(setup)]} now, ${unit}?`
+                : labelOf(hoseGauge(setup), unit)
+            }
+            isWanted={state.readNow}
+            shows={shows?.hose}
+          />
         )
       }
       onTakeBack={handlers.takeBack}

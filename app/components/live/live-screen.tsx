@@ -34,7 +34,7 @@ export function LiveScreen(props: LiveScreenProps) {
           </section>
         )}
         {state && <LiveKeys {...props} state={state} />}
-        <Heard state={state} />
+        <Heard state={state} said={saidNow(props)} />
       </main>
     </PressClockContext>
   );
@@ -75,13 +75,21 @@ function FirstPanel() {
   );
 }
 
-/** Both regions stand from the first paint; they change only when call or reason does. */
-function Heard({ state }: { state: ScreenState | undefined }) {
+/** What "Where it stands" was asked for, while it stands in the strip. */
+function saidNow({ ui: { entered }, clock }: LiveScreenProps): string | undefined {
+  return entered && !entered.id && entered.until > clock ? entered.text : undefined;
+}
+
+/**
+ * Both regions stand from the first paint; they change only when call or reason does, or when the
+ * present state is asked for.
+ */
+function Heard({ state, said }: { state: ScreenState | undefined; said: string | undefined }) {
   const heard = state?.heard;
   return (
     <>
       <div className="only-heard" role="status">
-        {heard && !heard.urgent ? heard.text : ''}
+        {said ?? (heard && !heard.urgent ? heard.text : '')}
       </div>
       <div className="only-heard" role="alert">
         {heard?.urgent ? heard.text : ''}
