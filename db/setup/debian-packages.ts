@@ -13,7 +13,7 @@ export async function installPackages(packages: readonly string[], why: string):
   const prefix = await rootPrefix();
   if (!prefix) {
     throw new SetupError(
-      `${why}. Installing needs root, and sudo asks for a password here.\nType this once: sudo ${byHand}`,
+      `${why}. Installing needs root, or a sudo that asks for no password.\nType this once: sudo ${byHand}`,
     );
   }
   console.log(`${why}: installing ${packages.join(' ')} from Debian's packages …`);
