@@ -8,7 +8,7 @@ import { celsius, formatTemperature } from '~/units';
 import { drawnAxles } from '../rounds/drawn-axles';
 import { placeUnits } from '../rounds/place-units';
 import { checkOf } from '../rounds/tire-check';
-import { verdictWord, wantsAction } from '../rounds/verdict-words';
+import { lacksAir, verdictWord, wantsAction } from '../rounds/verdict-words';
 import type { Route } from './+types/coach-overview';
 import { dayWords, dueWords, layoutWords, needWords } from './coach-words';
 import { FirstFill } from './first-fill';
@@ -33,7 +33,7 @@ export default function CoachOverview({ loaderData }: Route.ComponentProps) {
     position,
     pressureKpa: tires[index]?.kpa ?? undefined,
     targetKpa: tires[index]?.targetKpa ?? 0,
-    needsAir: verdict.kind === 'needs-air',
+    needsAir: lacksAir(verdict),
     note: wantsAction(verdict) ? verdictWord(verdict) : undefined,
   }));
   return (

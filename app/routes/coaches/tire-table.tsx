@@ -48,7 +48,13 @@ function columnsIn(unit: PressureUnit): Column<Row>[] {
       cell: ({ kpa }) => <b className="text-[19px]">{pressure(kpa)}</b>,
       figure: true,
     },
-    { key: 'target', head: 'Target', cell: ({ targetKpa }) => pressure(targetKpa), figure: true },
+    {
+      key: 'target',
+      head: 'Target',
+      cell: ({ targetKpa }) => pressure(targetKpa),
+      figure: true,
+      className: 'max-sm:hidden',
+    },
     {
       key: 'since',
       head: 'Since last',
@@ -76,7 +82,7 @@ const NameCell = ({ position, verdict }: Row) => (
     {positionName(position)}
     {wantsAction(verdict) && (
       <span className="block sm:hidden">
-        <span className="needs">{verdictWord(verdict)}</span>
+        <span className="needs whitespace-nowrap">{verdictWord(verdict)}</span>
       </span>
     )}
   </>

@@ -6,7 +6,7 @@ import type { FormAnswer } from '../coaches/form/read-form';
 import { drawnAxles } from './drawn-axles';
 import { ReadingEntry } from './reading-entry';
 import type { RoundTire, RoundView } from './round-data';
-import { shownPressure, verdictWord, wantsAction } from './verdict-words';
+import { lacksAir, shownPressure, verdictWord, wantsAction } from './verdict-words';
 
 export interface ColdCheckStepProps {
   view: RoundView;
@@ -82,7 +82,7 @@ const placed = ({ tires }: RoundView, current: RoundTire) =>
     position,
     pressureKpa: kpa ?? undefined,
     targetKpa: wheel.targetKpa,
-    needsAir: verdict.kind === 'needs-air',
+    needsAir: lacksAir(verdict),
     note: wantsAction(verdict) ? verdictWord(verdict) : undefined,
     href: `?tire=${position}`,
     current: position === current.position,

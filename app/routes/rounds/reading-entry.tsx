@@ -48,7 +48,7 @@ function KeypadEntry({ tire, unit, warm: warmAtFirst, onEnter }: ReadingEntryPro
   };
   return (
     <form
-      className="reading-keypad border border-t-0 border-ink"
+      className="border border-t-0 border-ink [&_.keypad-digits_.key]:min-h-18 [&_.keypad]:h-auto"
       onSubmit={(event) => {
         event.preventDefault();
         enter();

@@ -6,10 +6,11 @@ import { missingForFill } from '../coaches/first-fill';
 import type { FormAnswer } from '../coaches/form/read-form';
 import { Afterwards } from './afterwards';
 import { drawnAxles } from './drawn-axles';
-import { findingWords, outsideCompressorWords } from './finding-words';
+import { findingsToSay, findingWords, outsideCompressorWords } from './finding-words';
 import { needOf, type RoundTire, type RoundView } from './round-data';
+import { groupsOf } from './tire-groups';
 import { TireLine } from './tire-line';
-import { verdictWord, wantsAction } from './verdict-words';
+import { lacksAir, verdictWord, wantsAction } from './verdict-words';
 
 export interface RoundResultProps {
   view: RoundView;
@@ -33,14 +34,19 @@ export function RoundResult({ view, answer }: RoundResultProps) {
             <Link to={`/rounds/${round.id}`}>Go on with the cold check</Link>
           </p>
         )}
-        <ul className="border-t-2 border-ink">
-          {now.map((tire) => (
-            <TireLine key={tire.position} view={view} tire={tire} />
-          ))}
-        </ul>
+        {groupsOf(now, coach.layout).map(({ title, group }) => (
+          <section key={title} className="mt-3">
+            <h2 className="border-b-2 border-ink pb-1">{title}</h2>
+            <ul>
+              {group.map((tire) => (
+                <TireLine key={tire.position} view={view} tire={tire} />
+              ))}
+            </ul>
+          </section>
+        ))}
         {mayRun && !round.closedAt && <Afterwards view={view} answer={answer} />}
       </div>
-      <div className="lg:col-start-1 lg:row-start-1">
+      <div className={`lg:col-start-1 lg:row-start-1 ${round.closedAt ? '' : 'max-lg:hidden'}`}>
         <AxleDrawing unit={unit} axles={drawnAxles(coach.layout, now.map(placed))} />
       </div>
     </div>
@@ -52,7 +58,7 @@ function Notes({ view }: { view: RoundView }) {
   const { coach, fitting, mayEdit, tires, findings, unit } = view;
   const wanted = tires.some(({ fillable }) => fillable);
   const missing = wanted ? missingForFill({ ...coach, fitting }) : [];
-  const words = [...findings.map((finding) => findingWords(finding, unit))];
+  const words = [...findingsToSay(findings, tires).map((finding) => findingWords(finding, unit))];
   const outside = outsideCompressorWords(tires);
   if (outside) words.push(outside);
   if (view.round.closedAt || words.length + missing.length === 0) return null;
@@ -75,6 +81,6 @@ const placed = ({ position, kpa, wheel, verdict, fill }: RoundTire) => ({
   position,
   pressureKpa: fill?.endKpa ?? kpa ?? undefined,
   targetKpa: wheel.targetKpa,
-  needsAir: verdict.kind === 'needs-air',
+  needsAir: lacksAir(verdict),
   note: wantsAction(verdict) ? verdictWord(verdict) : undefined,
 });

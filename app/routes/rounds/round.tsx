@@ -52,12 +52,12 @@ export default function RoundRoute({ loaderData, actionData }: Route.ComponentPr
   return (
     <PageShell>
       <OutboxStrip />
-      <p className="-mt-4 mb-3">
+      <p className="quiet -mt-4 mb-4">
         <Link className="inline-flex min-h-11 items-center" to={`/coaches/${coach.id}`}>
           {coach.name}
         </Link>
+        {` · ${whereWords(view, unit)}`}
       </p>
-      <p className="quiet mb-5">{whereWords(view, unit)}</p>
       <Step view={view} answer={actionData as FormAnswer | undefined} />
     </PageShell>
   );

@@ -19,7 +19,7 @@ export function TireLine({ view, tire }: TireLineProps) {
   return (
     <li className="grid gap-x-6 gap-y-1 border-b border-rule py-4 sm:grid-cols-[minmax(0,1fr)_auto]">
       <div className="flex flex-wrap items-baseline gap-x-4">
-        <h2 className="text-[21px]">{positionName(position)}</h2>
+        <h3>{positionName(position)}</h3>
         <span>
           {kpa === null ? 'not read' : <b>{shownPressure(kpa, unit)}</b>} of{' '}
           {shownPressure(wheel.targetKpa, unit)}
@@ -29,7 +29,7 @@ export function TireLine({ view, tire }: TireLineProps) {
         )}
       </div>
       <div className="sm:col-start-1">
-        <p className="max-w-[36em]">{adviceWords(view, tire)}</p>
+        <p className="max-w-[36em] empty:hidden">{adviceWords(view, tire)}</p>
         <p className="flex flex-wrap gap-x-6">
           {tire.fill && tire.fill.how !== null && (
             <Link

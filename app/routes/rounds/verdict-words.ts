@@ -28,8 +28,14 @@ export function verdictWord(verdict: ColdVerdict): string {
 }
 
 /** Whether somebody has to do something about it. */
-export const wantsAction = ({ kind }: ColdVerdict): boolean =>
-  kind !== 'in-tolerance' && kind !== 'not-read' && kind !== 'warm';
+export const wantsAction = (verdict: ColdVerdict): boolean =>
+  verdict.kind === 'warm'
+    ? verdict.belowTarget
+    : verdict.kind !== 'in-tolerance' && verdict.kind !== 'not-read';
+
+/** Whether what is missing below the target's line is to be seen: a warm tire in tolerance hides it. */
+export const lacksAir = (verdict: ColdVerdict): boolean =>
+  wantsAction(verdict) && verdict.kind !== 'over';
 
 /** "4 psi", without zeros behind the point. */
 export const amount = (kpa: KpaDifference, unit: PressureUnit) =>
@@ -40,7 +46,7 @@ export const shownPressure = (kpa: number, unit: PressureUnit) =>
 
 /** What to do about a tire and why, in full sentences. */
 export function verdictAdvice(
-  { position, verdict }: SortedTire,
+  { verdict }: Pick<SortedTire, 'verdict'>,
   targetKpa: number,
   unit: PressureUnit,
 ): string {
@@ -51,7 +57,7 @@ export function verdictAdvice(
     case 'needs-air':
       return `Needs ${amount(verdict.byKpa, unit)}. Fill it to ${target}.`;
     case 'in-tolerance':
-      return 'Holds. Leave it as it is.';
+      return '';
     case 'over':
       return overWords(verdict, target, unit);
     case 'warm':
@@ -59,7 +65,7 @@ export function verdictAdvice(
     case 'too-low':
       return `At or below 80 % of its target: ${shownPressure(verdict.floorKpa, unit)}. It may have been run flat, so no fill is timed for it. Have it taken off and looked at by a technician.`;
     case 'mate-too-low':
-      return `${positionName(verdict.mate)} beside ${positionName(position)} is too low, so this one carried both loads. No fill is timed for it. Have it taken off and looked at by a technician.`;
+      return `${positionName(verdict.mate)} beside it is too low, so this one carried both loads. No fill is timed for it. Have it taken off and looked at by a technician.`;
   }
 }
 
