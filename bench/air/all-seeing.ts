@@ -17,7 +17,7 @@ const SETTLE_S = 15;
  * Knows the true pressures, and the plan of the perfect player; acts through the same late hands
  * and asks for the same proof: the floor for any adviser.
  */
-export function newAllSeeing(world: World, hands?: Hands): Adviser {
+export function newAllSeeing(world: World, hands: Hands): Adviser {
   const mind: Mind = {
     world,
     hands,
@@ -43,7 +43,7 @@ export function newAllSeeing(world: World, hands?: Hands): Adviser {
 
 interface Mind {
   world: World;
-  hands: Hands | undefined;
+  hands: Hands;
   best: PerfectResult;
   readingAt: number;
   readingKpa: number;
@@ -52,7 +52,7 @@ interface Mind {
 }
 
 /** Made anew whenever the chuck comes off: late hands may have missed what the last one counted on. */
-function plan(world: World, hands?: Hands): PerfectResult {
+function plan(world: World, hands: Hands): PerfectResult {
   return playPerfect(world, activeTire(world).reachable ? undefined : 0, hands);
 }
 

@@ -113,8 +113,8 @@ function drawTanks(dice: Dice) {
     accessoryL: between(dice, 5, 20),
     fitting: pick<Fitting>(dice, [
       ['service', 0.5],
-      ['supply', 0.35],
-      ['accessory', 0.15],
+      ['supply', 0.3],
+      ['accessory', 0.2],
     ]),
     protectionKpa: psi(between(dice, 60, 85)),
     accessoryC: between(dice, 1.5, 4),
@@ -170,8 +170,8 @@ function drawRig(dice: Dice) {
       dice,
       0,
       pick<number>(dice, [
-        [0.5, 0.6],
-        [1, 0.4],
+        [0.5, 0.85],
+        [1, 0.15],
       ]),
       0.12,
     ),
@@ -208,7 +208,7 @@ function reachableTarget(dice: Dice, air: Air, hard: boolean): number {
   const peak = toPsi(peakKpa(air));
   const cutIn = toPsi(air.cutInKpa);
   const most = peak - LEAST_HEADROOM_PSI - 2 * toPsi(air.governorJitterKpa);
-  if (hard) return Math.floor(Math.max(cutIn + 3, most - between(dice, 0, 5)));
+  if (hard) return Math.floor(Math.max(cutIn + 3, most - between(dice, 0, 6)));
   const lowest = air.lowerBy.length === 0 ? -25 : -20;
   const highest = air.lowerBy.length === 0 ? -3 : 5;
   return Math.floor(Math.min(cutIn + between(dice, lowest, highest), peak - 9));
@@ -248,9 +248,9 @@ export function drawDeficit(
   air: Pick<Coach, 'cutInKpa'>,
   plan: { hard: boolean; targetPsi: number },
 ): number {
-  if (!plan.hard) return between(dice, 3, 15);
+  if (!plan.hard) return between(dice, 3, 16);
   const room = plan.targetPsi - toPsi(air.cutInKpa);
-  return between(dice, 2.5, Math.max(4, Math.min(10, room)));
+  return between(dice, 2.5, Math.max(3.5, Math.min(6.5, room)));
 }
 
 /** Conductance from the gauge to the inside of the tire. */

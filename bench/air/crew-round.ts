@@ -7,7 +7,7 @@ import { readGauge } from './gauges';
 import type { Habits } from './habits';
 import type { FillOutcome } from './outcome';
 import { BETWEEN_TIRES_S, perfectFrom, walkOn } from './people-round';
-import { handsAlone } from './perfect';
+import { handsAlone, LATE_HANDS } from './perfect';
 import { between, chance, type Dice, diceFor } from './random';
 import { activeTire, startWorld, type World } from './world';
 
@@ -83,7 +83,7 @@ function fillTire(walk: Walk, plan: CrewPlan, index: number, tire: number): Fill
   const shared = { tire, perfectSeconds: best.seconds, habits: plan.habits, dice };
   const watch = plan.watch?.(tire);
   if (!plan.createFill) {
-    const hands = plan.habits.alone ? handsAlone(world.coach.walkS) : undefined;
+    const hands = plan.habits.alone ? handsAlone(world.coach.walkS) : LATE_HANDS;
     return runFill(world, newAllSeeing(world, hands), { ...shared, watch });
   }
   const setup = setupFor(walk, plan.habits, dice, pause);

@@ -4,8 +4,8 @@ export const KPA_PER_PSI = 6.894757293168361;
 export const psi = (value: number): number => value * KPA_PER_PSI;
 export const toPsi = (kpa: number): number => kpa / KPA_PER_PSI;
 
-/** Halvings of the bracket for the pressure at the gauge: 1/2^20 of the drop is far below a gauge. */
-const HALVINGS = 20;
+/** Halvings of the bracket for the pressure at the gauge: 1/2^14 of the drop is far below a gauge. */
+const HALVINGS = 14;
 
 /**
  * Air through one component, ISO 6358: in kPa·L/s at ambient temperature, pressures absolute in

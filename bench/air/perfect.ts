@@ -51,9 +51,20 @@ export function playPerfect(
   return best;
 }
 
+/** Hands that wait for a call first: what an adviser must plan with, in seconds. */
+export const LATE_HANDS: Hands = {
+  on: 3,
+  off: 2,
+  pedal: 2.5,
+  drain: 5,
+  stop: 1.7,
+  fastIdle: 4,
+  walk: 0,
+};
+
 /** Alone, the pedal costs a walk to the seat and one back. */
 export function handsAlone(walkS: number): Hands {
-  return { ...HANDS, pedal: HANDS.pedal + walkS, walk: walkS };
+  return { ...LATE_HANDS, pedal: LATE_HANDS.pedal + walkS, walk: walkS };
 }
 
 function lowering(world: World): Policy[] {

@@ -31,13 +31,13 @@ export interface PersonTraits {
 export const PLAIN: PersonTraits = {
   guessPsiPerS: 0.12,
   guessSigma: 0.4,
-  boldness: 0.82,
+  boldness: 0.92,
   learns: false,
   risingPsi: 5,
   restingPsi: 9,
   nearPsi: 1.5,
-  longestHoldS: 75,
-  longestFirstS: 30,
+  longestHoldS: 60,
+  longestFirstS: 25,
 };
 
 export const EXPERT: PersonTraits = {

@@ -269,8 +269,13 @@ function passAir(world: World, up: Vessel, down: Vessel, firstC: number, secondC
   const upAbs = pressureAbs(up);
   const downAbs = pressureAbs(down);
   world.teeKpaAbs = pressureBetween(upAbs, firstC, downAbs, secondC, b);
-  const flow = flowThrough(upAbs, world.teeKpaAbs, firstC, b) * STEP_S;
-  const amount = Math.min(flow, levelling(up, down, upAbs - downAbs));
+  // Taken where the drop is greater, and the error of the pressure between them smaller.
+  const tee = world.teeKpaAbs;
+  const flow =
+    upAbs - tee > tee - downAbs
+      ? flowThrough(upAbs, tee, firstC, b)
+      : flowThrough(tee, downAbs, secondC, b);
+  const amount = Math.min(flow * STEP_S, levelling(up, down, upAbs - downAbs));
   move(world, up, down, amount);
   const tire = world.tires[world.active]!;
   world.tireFlow = (down === tire ? amount : -amount) / STEP_S;
