@@ -1,4 +1,4 @@
-import { existsSync, mkdirSync, readdirSync, renameSync, rmSync, statSync } from 'node:fs';
+import { existsSync, mkdirSync, readdirSync, rmSync, statSync } from 'node:fs';
 import { join } from 'node:path';
 import { build, isBuilt, sourceHash } from './build';
 import { testDataFolder } from './paths';
@@ -14,20 +14,17 @@ export async function testBuild(): Promise<string> {
   const builds = join(testDataFolder, 'builds');
   mkdirSync(builds, { recursive: true });
   removeOld(builds);
-  const folder = join(builds, sourceHash().slice(0, 16));
-  if (isBuilt(folder)) {
+  const hash = sourceHash().slice(0, 16);
+  const known = readdirSync(builds).find(
+    (name) => name.startsWith(hash) && isBuilt(join(builds, name)),
+  );
+  if (known) {
     console.log('These sources are built already.');
-    return folder;
+    return join(builds, known);
   }
-  const making = `${folder}-${process.pid}`;
-  await build(making);
-  // Another run may have finished the same build meanwhile; then its is as good.
-  if (isBuilt(folder)) {
-    rmSync(making, { recursive: true });
-  } else {
-    rmSync(folder, { recursive: true, force: true });
-    renameSync(making, folder);
-  }
+  // Never renamed: the server's bundle names the folder that its assets are served from.
+  const folder = join(builds, `${hash}-${process.pid}`);
+  await build(folder);
   return folder;
 }
 
