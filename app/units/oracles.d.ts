@@ -16,19 +16,3 @@ declare module 'psychrolib' {
   };
   export default psychrolib;
 }
-
-/** Shipped as TypeScript source that does not pass this project's strictness. */
-declare module 'odex' {
-  export class Solver {
-    constructor(dimension: number);
-    relativeTolerance: number;
-    absoluteTolerance: number;
-    maxSteps: number;
-    solve(
-      slopes: (x: number, y: number[]) => number[],
-      x: number,
-      y0: number[],
-      xEnd: number,
-    ): { y: number[]; outcome: number };
-  }
-}

@@ -7,6 +7,7 @@ import { type Helper, listen, newHelper, stepHelper, stopLowering } from './help
 import { type FillOutcome, noCoverage, readOutcome } from './outcome';
 import { deliverDue, newPhone, type Phone, recordCall, tapDone, tapNow } from './phone';
 import { between, chance, type Dice } from './random';
+import { readClock, startClock } from './stopwatch';
 import {
   activeTire,
   fittingKpa,
@@ -152,9 +153,9 @@ function notePhysics(run: Run): void {
 
 function ask(run: Run): void {
   const { now } = run;
-  const from = performance.now();
+  const clock = startClock();
   const advice = run.adviser.advise(now);
-  run.outcome.adviseMs.push(performance.now() - from);
+  run.outcome.adviseMs.push(readClock(clock));
   run.watch.asked?.(run, advice);
   const changed = advice.call !== run.advice?.call;
   run.advice = advice;
