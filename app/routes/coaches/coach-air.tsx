@@ -5,6 +5,7 @@ import { updateCoach } from '~/commands/update-coach.server';
 import { updateRig } from '~/commands/update-rig.server';
 import { loadLearnedAir } from '~/queries/air-profile.server';
 import { loadCoach } from '~/queries/coach.server';
+import { requireCoach } from '~/queries/coach-access.server';
 import { pageAnswers } from '~/services/answers.server';
 import { requireViewer } from '~/services/viewer.server';
 import type { PressureUnit } from '~/units';
@@ -26,6 +27,7 @@ export const loader = pageAnswers(async ({ context, request, params }: Route.Loa
 
 export const action = pageAnswers(async ({ context, request, params }: Route.ActionArgs) => {
   const { actor, pressureUnit } = await requireViewer(context, request);
+  await requireCoach(actor, 'records:edit', params.coachId);
   const values = formValues(await request.formData(), ['lowerBy']);
   const read = await keep(actor, params.coachId, values, pressureUnit);
   return read.ok ? redirect(`?saved=${values.intent}#${values.intent}`) : sendBack(read.answer);

@@ -5,6 +5,7 @@ import { Button } from '~/components/button';
 import { Field, PressureField } from '~/components/form/field';
 import { FormErrors } from '~/components/form/form-errors';
 import { loadCoach } from '~/queries/coach.server';
+import { requireCoach } from '~/queries/coach-access.server';
 import { pageAnswers } from '~/services/answers.server';
 import { requireViewer } from '~/services/viewer.server';
 import { formatPressureDifference, kpaDifference } from '~/units';
@@ -22,6 +23,7 @@ export const loader = pageAnswers(async ({ context, request, params }: Route.Loa
 export const action = pageAnswers(async ({ context, request, params }: Route.ActionArgs) => {
   const { actor, pressureUnit } = await requireViewer(context, request);
   const { coachId } = params;
+  await requireCoach(actor, 'records:edit', coachId);
   const { name } = await loadCoach(actor, coachId);
   const values = formValues(await request.formData());
   if (values.intent === 'remove') {

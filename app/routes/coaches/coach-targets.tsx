@@ -6,6 +6,7 @@ import { FormErrors } from '~/components/form/form-errors';
 import { axleName, axleOf, axlesOf } from '~/loads';
 import { loadAxleTargets } from '~/queries/axle-targets.server';
 import { loadCoach } from '~/queries/coach.server';
+import { requireCoach } from '~/queries/coach-access.server';
 import { loadFittedTires } from '~/queries/fitted-tires.server';
 import { pageAnswers } from '~/services/answers.server';
 import { requireViewer } from '~/services/viewer.server';
@@ -31,6 +32,7 @@ export const loader = pageAnswers(async ({ context, request, params }: Route.Loa
 export const action = pageAnswers(async ({ context, request, params }: Route.ActionArgs) => {
   const { actor, pressureUnit: unit } = await requireViewer(context, request);
   const { coachId } = params;
+  await requireCoach(actor, 'records:edit', coachId);
   const { layout } = await loadCoach(actor, coachId);
   const values = formValues(await request.formData());
   const read = readForm(targetsSchema(layout, unit), values);

@@ -3,6 +3,7 @@ import { correctTire, replaceTire, swapTires } from '~/commands/update-tires.ser
 import { DataTable } from '~/components/data-table';
 import { positionsOf } from '~/loads';
 import { loadCoach } from '~/queries/coach.server';
+import { requireCoach } from '~/queries/coach-access.server';
 import { loadFittedTires } from '~/queries/fitted-tires.server';
 import { pageAnswers } from '~/services/answers.server';
 import { requireViewer } from '~/services/viewer.server';
@@ -27,6 +28,7 @@ export const loader = pageAnswers(async ({ context, request, params }: Route.Loa
 export const action = pageAnswers(async ({ context, request, params }: Route.ActionArgs) => {
   const { actor, pressureUnit: unit } = await requireViewer(context, request);
   const { coachId } = params;
+  await requireCoach(actor, 'records:edit', coachId);
   const values = formValues(await request.formData());
   const move = values.intent === 'move';
   const read = move

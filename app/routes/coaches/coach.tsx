@@ -16,6 +16,7 @@ export const loader = pageAnswers(async ({ context, request, params }: Route.Loa
 export default function CoachFrame({ loaderData: { id, maySeeLog } }: Route.ComponentProps) {
   return (
     <PageShell nav={<CoachNav coachId={id} pages={pagesFor(maySeeLog)} />}>
+      <OutboxStrip />
       <Outlet />
     </PageShell>
   );

@@ -1,6 +1,7 @@
 import { Link } from 'react-router';
 import { ButtonLink } from '~/components/button';
 import { EmptyState } from '~/components/empty-state';
+import { OutboxStrip } from '~/components/outbox/outbox-strip';
 import { PageShell } from '~/components/shell/page-shell';
 import { type CoachInList, listCoaches } from '~/queries/coaches.server';
 import { pageAnswers } from '~/services/answers.server';
@@ -17,6 +18,7 @@ export default function Coaches({ loaderData: { coaches, now } }: Route.Componen
   const make = <ButtonLink to="/coaches/new">Make a coach</ButtonLink>;
   return (
     <PageShell narrow>
+      <OutboxStrip />
       <h1 className="mb-8">Coaches</h1>
       {coaches.length === 0 ? (
         <EmptyState title="No coach yet" actions={make}>

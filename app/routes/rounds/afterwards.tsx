@@ -2,6 +2,7 @@ import { useState } from 'react';
 import { Form } from 'react-router';
 import { Button } from '~/components/button';
 import { ChoiceField } from '~/components/form/choice-field';
+import { FormErrors } from '~/components/form/form-errors';
 import { closeRound } from '~/fill/commands';
 import { afterwardsKeys } from '~/fill/wire';
 import { type FormAnswer, formValues, problemOf, readForm } from '../coaches/form/read-form';
@@ -40,6 +41,7 @@ export function Afterwards({ view, answer: told }: AfterwardsProps) {
             close(new FormData(event.currentTarget));
           }}
         >
+          <FormErrors errors={answer?.problems.filter(({ name }) => name === 'afterwards') ?? []} />
           <ChoiceField
             label="Tick each when it is so"
             name="afterwards"

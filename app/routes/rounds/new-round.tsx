@@ -3,7 +3,6 @@ import { Form, Link, redirect, useNavigate } from 'react-router';
 import { startRound as startRoundCommand } from '~/commands/start-round.server';
 import { Button } from '~/components/button';
 import { FormErrors } from '~/components/form/form-errors';
-import { OutboxStrip } from '~/components/outbox/outbox-strip';
 import { startRound } from '~/fill/commands';
 import { newId } from '~/fill/ids';
 import { thisPhone } from '~/fill/phone';
@@ -59,7 +58,6 @@ export default function NewRound({ loaderData, actionData }: Route.ComponentProp
   return (
     <>
       <h1 className="mb-8">A new round</h1>
-      <OutboxStrip />
       {rounds.open && (
         <p className="form-done mb-8">
           The round of {dayWords(rounds.open.startedAt, now, rounds.open.timeZone)} is still open.{' '}

@@ -10,6 +10,7 @@ import { composeFillSetup } from '~/fill/fill-setup';
 import { newId } from '~/fill/ids';
 import { emptyPhone } from '~/fill/store';
 import { type RunBody, versioned } from '~/fill/wire';
+import { requireRound } from '~/queries/round-access.server';
 import { Refusal } from '~/services/refusal.server';
 import type { Viewer } from '~/services/viewer.server';
 import { runForForm, sendBack } from '../coaches/form/answer-form.server';
@@ -30,6 +31,7 @@ interface Asked {
 /** Answers the forms of a round where no script runs: the same commands as a phone's. */
 export async function answerRoundForm({ viewer, roundId, values }: Asked) {
   const { actor } = viewer;
+  await requireRound(actor, 'round:run', roundId);
   switch (values.intent) {
     case 'cautions':
       await acknowledgeCautions(actor, roundId, versioned({ acknowledgedAt: nowText() }));
