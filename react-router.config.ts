@@ -17,7 +17,7 @@ export default {
     v8_splitRouteModules: true,
     v8_viteEnvironmentApi: true,
     v8_trailingSlashAwareDataRequests: true,
-    v8_passThroughRequests: true,
+    // `v8_passThroughRequests` stays off: with it a relative redirect goes to the data address.
   },
 } satisfies Config;
 
