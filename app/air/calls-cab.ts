@@ -3,7 +3,7 @@ import type { Decision, Situation } from './advise';
 import type { CabCall } from './contract';
 
 /** Fast idle is asked back when it is less likely than this after the pedal. */
-const FAST_IDLE_LIKELY = 0.55;
+const FAST_IDLE_LIKELY = 0.85;
 
 export function cabCall(s: Situation, decision: Decision): CabCall {
   const { facts, belief } = s;

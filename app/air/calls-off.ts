@@ -2,7 +2,7 @@
 import type { Decision, Situation } from './advise';
 import { chance } from './belief';
 import { lastTouched } from './facts';
-import { costOf, type Goal, rollOut, sampleFor } from './forecast';
+import { costOf, type Goal, meanOf, rollOut, rollOutBest, sampleFor } from './forecast';
 import { lowestSupply, planGoal } from './plan';
 import { evenSpread } from './spread';
 
@@ -13,13 +13,17 @@ const LOADED_LIKELY = 0.55;
 const UNKNOWN_KPA = 70;
 /** The chuck goes on where air is this likely to flow in when hands have done it. */
 const FLOWS_LIKELY = 0.7;
+/** A hold that brings less than this is not worth the hands, kPa. */
+const LEAST_HOLD_KPA = 1.5;
 /** What a shown call is worth over a change of mind, s. */
 const STANDS_S = 6;
 
 export function callWhileOff(s: Situation): Decision {
   const { facts, belief, setup } = s;
-  if (facts.lowering && !handsAreOff(s)) return whileLowering(s);
-  if (needsGauge(s)) return { call: 'gauge-tire', reason: 'prove-it' };
+  const gauge = needsGauge(s);
+  if (isLowering(s))
+    return gauge && facts.helper ? gaugeMeanwhile(whileLowering(s)) : whileLowering(s);
+  if (gauge) return gaugeFirst(s);
   const reach = cannotReach(s);
   if (reach) return reach;
   if (facts.readings.length === 0 && !setup.supply) {
@@ -31,6 +35,22 @@ export function callWhileOff(s: Situation): Decision {
     return { call: 'read-supply', reason: 'supply-unsure' };
   }
   return choosePlan(s, planGoal(s));
+}
+
+/** With a helper, the wheel gauges while the seat brings the supply down, where it must come down. */
+function gaugeFirst(s: Situation): Decision {
+  const { targetKpa, toleranceKpa } = s.setup.tire;
+  const surelyShort = s.belief.tire.p90 < targetKpa - toleranceKpa;
+  if (s.facts.helper && surelyShort && s.facts.readings.length > 0) {
+    const plan = choosePlan(s, planGoal(s));
+    if (plan.call === 'lower-supply') return gaugeMeanwhile(plan);
+  }
+  return { call: 'gauge-tire', reason: 'prove-it' };
+}
+
+function gaugeMeanwhile(plan: Decision): Decision {
+  const cab = plan.call === 'lower-supply' || plan.call === 'stop-lowering' ? plan.call : undefined;
+  return { call: 'gauge-tire', reason: 'see-what-went-in', cab, by: plan.by };
 }
 
 /** Gauge when the tire may be there already, or is known too badly to time the next hold. */
@@ -53,9 +73,10 @@ function cannotReach(s: Situation): Decision | undefined {
   return { call: 'cannot-reach', reason: 'governor-too-low', reachKpa: belief.cutOut };
 }
 
-/** A stop that was not tapped: the ensemble believes that nobody lowers any more. */
-function handsAreOff(s: Situation): boolean {
-  return chance(s.e, (i) => s.e.members.idleHands[i] === 1) > 0.75;
+/** By the log, unless the ensemble believes that a stop was not tapped. */
+function isLowering(s: Situation): boolean {
+  if (!s.facts.lowering) return false;
+  return chance(s.e, (i) => s.e.members.idleHands[i] === 1) <= 0.75;
 }
 
 function whileLowering(s: Situation): Decision {
@@ -81,12 +102,14 @@ interface Weighed {
 }
 
 /** Runs the ensemble ahead under each plan that is open, and takes the one that is done soonest. */
-function choosePlan(s: Situation, goal: Goal): Decision {
+function choosePlan(s: Situation, first: Goal): Decision {
   const { facts, e } = s;
   const atmosphere = e.controls.atmosphereKpa;
   const sample = sampleFor(e);
+  const put = rollOutBest(sample, 'on-now', first, atmosphere);
+  const now = put.outcome;
+  const goal = put.goal;
   const wait = rollOut(sample, 'wait', goal, atmosphere);
-  const now = rollOut(sample, 'on-now', goal, atmosphere);
   const waitIn = evenSpread(wait.change);
   const waits: Decision = { call: 'wait', reason: waitReason(s), changeIn: waitIn };
   const puts: Decision = {
@@ -95,7 +118,8 @@ function choosePlan(s: Situation, goal: Goal): Decision {
     changeIn: evenSpread(now.change),
   };
   const atOnce = waitIn.p50 <= 0.5 * goal.hands.putOn;
-  const worthIt = atOnce || puts.changeIn!.p50 > goal.hands.putOn + 3;
+  const short = goal.enoughAbs - atmosphere - s.belief.tire.p50;
+  const worthIt = atOnce || meanOf(now.gained) > Math.min(LEAST_HOLD_KPA, 0.5 * short);
   const flows = meanOf(now.flowed) >= FLOWS_LIKELY;
   const plans: Weighed[] = [{ call: 'wait', cost: costOf(wait) + 1, decision: waits }];
   if (flows && worthIt) {
@@ -117,12 +141,6 @@ function choosePlan(s: Situation, goal: Goal): Decision {
   return best.decision;
 }
 
-function meanOf(values: Float64Array): number {
-  let sum = 0;
-  for (let i = 0; i < values.length; i++) sum += values[i]!;
-  return sum / values.length;
-}
-
 function soonest(s: Situation, plans: Weighed[]): Weighed {
   const cost = (plan: Weighed) => plan.cost - (plan.call === s.facts.shown ? STANDS_S : 0);
   return plans.reduce((best, plan) => (cost(plan) < cost(best) ? plan : best));
@@ -130,7 +148,7 @@ function soonest(s: Situation, plans: Weighed[]): Weighed {
 
 /** Never while the compressor may be loaded, nor below cut-in less 3 psi, nor under 80 psi. */
 function mayLower(s: Situation, goal: Goal): boolean {
-  if (!goal.by || s.belief.loaded >= LOADED_LITTLE || s.facts.lowering) return false;
+  if (!goal.by || s.belief.loaded >= LOADED_LITTLE) return false;
   return s.belief.supply.p50 > goal.lowestAbs - s.e.controls.atmosphereKpa;
 }
 

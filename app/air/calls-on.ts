@@ -1,7 +1,7 @@
 /** The chuck is on: keep it, or take it off. */
 import type { Decision, Situation } from './advise';
 import { chance } from './belief';
-import { costOf, type Goal, rollOut, sampleFor } from './forecast';
+import { costOf, type Goal, rollOut, rollOutBest, sampleFor } from './forecast';
 import { planGoal } from './plan';
 import { evenSpread } from './spread';
 
@@ -42,14 +42,18 @@ function gaugeAfter(s: Situation, i: number, seconds: number): number {
 function keepOrCycle(s: Situation, goal: Goal): Decision {
   const atmosphere = s.e.controls.atmosphereKpa;
   const sample = sampleFor(s.e);
-  const keep = rollOut(sample, 'keep-on', goal, atmosphere);
+  const kept = rollOutBest(sample, 'keep-on', goal, atmosphere);
+  const keep = kept.outcome;
   const changeIn = evenSpread(keep.change);
   const saidOff = s.facts.shown === 'chuck-off' && s.at - s.facts.shownAt < STICKS_S;
   if (saidOff && changeIn.p50 < 6) return { call: 'chuck-off', reason: 'cycle-again' };
   if (changeIn.p50 <= 1) return { call: 'chuck-off', reason: 'supply-at-tire' };
   if (s.belief.loaded < 0.4) {
-    const off = rollOut(sample, 'off-now', goal, atmosphere);
-    if (costOf(off) < costOf(keep) - 2) return { call: 'chuck-off', reason: 'cycle-again' };
+    const off = rollOut(sample, 'off-now', kept.goal, atmosphere);
+    // It stays on while it gains faster than the cycles that would follow.
+    const remaining = goal.aimAbs - atmosphere - s.belief.tire.p50;
+    const slow = s.belief.gain.p50 * costOf(off) < remaining;
+    if (slow && costOf(off) < costOf(keep) - 2) return { call: 'chuck-off', reason: 'cycle-again' };
   }
   const offBy = Math.round((s.at + Math.max(3, changeIn.p90)) * 10) / 10;
   return { call: 'keep-on', reason: 'air-goes-in', changeIn, offBy };

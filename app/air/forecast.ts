@@ -46,6 +46,8 @@ export interface Goal {
   /** How the supply may be brought down; none: wait for it. */
   by: LowerBy | undefined;
   lowestAbs: number;
+  /** Gain a second, kPa, under which a hold on a falling supply is given up. */
+  leastGain: number;
   hands: Hands;
 }
 
@@ -56,10 +58,10 @@ export interface Outcome {
   lost: Float64Array;
   /** 1 where the supply stood above the tire when the chuck first went on. */
   flowed: Float64Array;
+  /** kPa gained by the end of the first hold. */
+  gained: Float64Array;
 }
 
-/** Gain a second, kPa, under which a hold on a falling supply is given up. */
-const LEAST_GAIN = { whereLowered: 0.2, elsewhere: 0.03 };
 /** The supply must stand this much above the tire before the chuck goes on, kPa. */
 export const MARGIN_KPA = 1.5;
 /** A tire that is still low at the end is charged this much time a kPa. */
@@ -98,6 +100,7 @@ export function createOutcome(): Outcome {
     done: new Float64Array(ROLLOUT_MEMBERS),
     lost: new Float64Array(ROLLOUT_MEMBERS),
     flowed: new Float64Array(ROLLOUT_MEMBERS),
+    gained: new Float64Array(ROLLOUT_MEMBERS),
   };
 }
 
@@ -143,6 +146,7 @@ function runMember(
   let left = lasting(phase, goal.hands);
   let change = -1;
   let onAt = -1;
+  const tireAtStart = m.tireAbs[i]!;
   let lost = 0;
   let t = 0;
   const openPath = m.path[i] === PATH.off ? PATH.seated : m.path[i]!;
@@ -155,6 +159,9 @@ function runMember(
     if (next !== phase) {
       if (change < 0 && !(plan === 'on-now' && first === phase)) change = t;
       if (phase === PHASE.gauging && next === PHASE.on) break;
+      if (phase === PHASE.on && outcome.gained[i] === 0) {
+        outcome.gained[i] = m.tireAbs[i]! - tireAtStart;
+      }
       phase = next;
       left = lasting(phase, goal.hands);
       if (phase === PHASE.on) {
@@ -205,11 +212,7 @@ function endsHold(m: Members, i: number, goal: Goal): boolean {
   const gain = m.flow[i]! / m.tireL[i]!;
   if (m.tireAbs[i]! + gain * goal.hands.takeOff >= goal.aimAbs) return true;
   if (sourceAbs(m, i) < m.tireAbs[i]! + m.warmth[i]! && m.loaded[i] === 0) return true;
-  return (
-    m.loaded[i] === 0 &&
-    m.sinceSwitch[i]! > 1 &&
-    gain < (goal.by ? LEAST_GAIN.whereLowered : LEAST_GAIN.elsewhere)
-  );
+  return m.loaded[i] === 0 && m.sinceSwitch[i]! > 1 && gain < goal.leastGain;
 }
 
 /** Mean time to done, with lost air charged. */
@@ -217,4 +220,31 @@ export function costOf(outcome: Outcome): number {
   let sum = 0;
   for (let i = 0; i < ROLLOUT_MEMBERS; i++) sum += outcome.done[i]! + 25 * outcome.lost[i]!;
   return sum / ROLLOUT_MEMBERS;
+}
+
+/** Gains under which a hold may be given up, kPa a second: cycle early, or stay to the last. */
+const LEAST_GAINS = [0.2, 0.05];
+
+/** The same plan, holding on for longer or shorter: the better of both, and the goal for it. */
+export function rollOutBest(
+  sample: Members,
+  plan: Plan,
+  goal: Goal,
+  atmosphereKpa: number,
+): { outcome: Outcome; goal: Goal } {
+  let best = { outcome: rollOut(sample, plan, goal, atmosphereKpa), goal };
+  if (!goal.by) return best;
+  for (const leastGain of LEAST_GAINS) {
+    if (leastGain === goal.leastGain) continue;
+    const other = { ...goal, leastGain };
+    const outcome = rollOut(sample, plan, other, atmosphereKpa);
+    if (costOf(outcome) < costOf(best.outcome)) best = { outcome, goal: other };
+  }
+  return best;
+}
+
+export function meanOf(values: Float64Array): number {
+  let sum = 0;
+  for (let i = 0; i < values.length; i++) sum += values[i]!;
+  return sum / values.length;
 }

@@ -53,6 +53,7 @@ export function planGoal(s: Situation): Goal {
     limitAbs: (limitKpa ?? 2000) + atmosphere,
     by,
     lowestAbs: lowestSupply(s) + atmosphere,
+    leastGain: by ? 0.2 : 0.03,
     hands: handsOf(s, by),
   };
 }
