@@ -1,6 +1,7 @@
 import type { GaugeTraits } from './coach';
 import { type Dice, normal } from './random';
-import { activeTire, pressureAbs, tireKpa, type World } from './world';
+import { pressureAbs } from './vessel';
+import { activeTire, tireKpa, type World } from './world';
 
 /** What a gauge shows to a person: its own error, then the nearest mark. */
 export function readGauge(gauge: GaugeTraits, trueKpa: number, dice: Dice): number {

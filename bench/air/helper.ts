@@ -13,7 +13,8 @@ import {
 } from './habits';
 import { type Phone, tapDone, tapNow } from './phone';
 import { between, chance, type Dice } from './random';
-import { pressureAbs, STEP_S, type World } from './world';
+import { pressureAbs } from './vessel';
+import { STEP_S, type World } from './world';
 
 type CabTask = 'nothing' | 'speed' | 'lower' | 'stop' | 'dash';
 

@@ -4,7 +4,7 @@ import type { Habits } from './habits';
 import type { Who } from './options';
 import type { FillOutcome } from './outcome';
 import { roundByEye } from './people-round';
-import { EXPERT, PLAIN } from './tee-person';
+import { EXPERT, PLAIN } from './person-traits';
 
 /** One coach for one actor: what a worker is handed. */
 export interface Job {

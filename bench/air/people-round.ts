@@ -1,8 +1,9 @@
 import { type Coach, drawCoach } from './coach';
 import type { FillOutcome } from './outcome';
 import { playPerfect } from './perfect';
+import type { PersonTraits } from './person-traits';
 import { between, diceFor } from './random';
-import { fillByEye, outcomeByEye, type PersonTraits, startMemory } from './tee-person';
+import { fillByEye, outcomeByEye, startMemory } from './tee-person';
 import { activeTire, copyWorld, STEP_S, startWorld, stepWorld, type World } from './world';
 
 /** Walk to the next tire with hose and chuck, s. */

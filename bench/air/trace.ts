@@ -1,7 +1,8 @@
 import type { Advice, FillEvent, FillSetup } from './adviser';
 import type { Run, Watch } from './fill-run';
 import { toPsi } from './flow';
-import { activeTire, fittingKpa, pressureAbs, settledKpa, type World } from './world';
+import { pressureAbs } from './vessel';
+import { activeTire, fittingKpa, settledKpa, type World } from './world';
 
 /** A line without any event is printed this often, s. */
 const QUIET_S = 10;

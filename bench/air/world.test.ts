@@ -2,11 +2,11 @@ import { describe, expect, it } from 'vitest';
 import { drawCoach } from './coach';
 import { psi } from './flow';
 import { playPerfect, playPolicy } from './perfect';
+import { pressureAbs } from './vessel';
 import {
   activeTire,
   copyWorld,
   fittingKpa,
-  pressureAbs,
   settledKpa,
   startWorld,
   stepWorld,

@@ -1,12 +1,11 @@
 import { type Coach, chuckSideC, type WorldTire } from './coach';
 import { flowThrough, pressureBetween, psi } from './flow';
 import { between, type Dice, diceFor, normal } from './random';
+import { cool, levelling, pressureAbs, shift, type Vessel } from './vessel';
 
 /** One step of the world in seconds: far below a governor's swing and a hand's second. */
 export const STEP_S = 0.1;
 
-/** Heat of compression at constant volume, (γ − 1) for air. */
-const HEATING = 0.4;
 /** Tank walls are steel and bare, so that little of the warmth shows, and not for long. */
 const TANK_WARMTH = { gain: 0.06, settleS: 20 };
 /** Length of one push on the pedal, s. */
@@ -15,16 +14,6 @@ const PUSH_S = 0.6;
 const LEAKING = { coreShare: 0.6, leakC: 0.06 };
 /** A pin in the core lets out about this share of what the core lets in. */
 const BLEED_SHARE = 0.5;
-
-/** Air in a vessel, as pressure times volume at ambient temperature (kPa·L). */
-export interface Vessel {
-  amount: number;
-  volumeL: number;
-  /** Gas temperature over ambient, less one. */
-  warmth: number;
-  gain: number;
-  settleS: number;
-}
 
 export type ChuckState = 'off' | 'open' | 'blocked' | 'leaking';
 export type Speed = 'idle' | 'fast-idle';
@@ -132,10 +121,6 @@ export function copyWorld(world: World): World {
   };
 }
 
-export function pressureAbs(vessel: Vessel): number {
-  return (vessel.amount / vessel.volumeL) * (1 + vessel.warmth);
-}
-
 export function fittingVessel(world: World): Vessel {
   const { fitting } = world.coach;
   if (fitting === 'supply') return world.supply;
@@ -187,11 +172,6 @@ function move(world: World, from: Vessel | null, to: Vessel | null, amount: numb
   else world.given += amount;
 }
 
-function shift(vessel: Vessel, amount: number): void {
-  vessel.warmth += (vessel.gain * HEATING * amount) / vessel.amount;
-  vessel.amount += amount;
-}
-
 function compress(world: World): void {
   if (!world.loaded) return;
   const { coach } = world;
@@ -241,11 +221,6 @@ function passCheck(world: World, up: Vessel, down: Vessel, c: number): void {
   move(world, up, down, Math.min(flow * STEP_S, levelling(up, down, drop)));
 }
 
-/** The amount that brings two vessels level: no step may carry more across. */
-function levelling(up: Vessel, down: Vessel, drop: number): number {
-  return (drop * up.volumeL * down.volumeL) / (up.volumeL + down.volumeL);
-}
-
 function passTire(world: World): void {
   const { coach } = world;
   const tire = world.tires[world.active]!;
@@ -293,12 +268,8 @@ function bleed(world: World, tire: Vessel): void {
 }
 
 function settle(world: World): void {
-  for (const tank of [world.supply, world.service, world.accessory]) cool(tank);
-  for (const tire of world.tires) cool(tire);
-}
-
-function cool(vessel: Vessel): void {
-  vessel.warmth -= (vessel.warmth * STEP_S) / vessel.settleS;
+  for (const tank of [world.supply, world.service, world.accessory]) cool(tank, STEP_S);
+  for (const tire of world.tires) cool(tire, STEP_S);
 }
 
 function govern(world: World): void {
