@@ -60,9 +60,15 @@ export function placeLabels(wanted: readonly WantedLabel[], lanes: Lanes): Place
     const place = label && firstPlace(label, placed, lanes);
     if (place) placed.push({ index, ...place });
   }
-  return placed
+  return moveUp(placed)
     .sort((a, b) => a.index - b.index)
     .map(({ index, lane, left }) => ({ index, lane, left }));
+}
+
+/** Closes lanes that hold nothing; what stood below another still does. */
+function moveUp<Label extends { lane: number }>(labels: readonly Label[]): Label[] {
+  const used = [...new Set(labels.map(({ lane }) => lane))].sort((a, b) => a - b);
+  return labels.map((label) => ({ ...label, lane: used.indexOf(label.lane) }));
 }
 
 interface Occupied {

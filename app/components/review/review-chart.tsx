@@ -11,7 +11,7 @@ import {
   ZIndexLayer,
 } from 'recharts';
 import { formatPressure, gaugeKpa, type PressureUnit } from '~/units';
-import { pressureTicks, timeTicks } from './axis-ticks';
+import { drawnRange, pressureTicks, timeTicks } from './axis-ticks';
 import { ChartCalls } from './chart-calls';
 import { belowPlot, frameFor } from './chart-frame';
 import { ChartHolds, ChartNames, ChartReadings } from './chart-marks';
@@ -36,7 +36,7 @@ const onTop = 1000;
 export function ReviewChart({ view, unit, width, height }: ReviewChartProps) {
   const hatch = useId();
   const frame = frameFor(width);
-  const ticks = pressureTicks(...pressureRange(view), unit);
+  const ticks = pressureTicks(...drawnRange(view), unit);
   return (
     <ComposedChart
       accessibilityLayer={false}
@@ -55,8 +55,14 @@ export function ReviewChart({ view, unit, width, height }: ReviewChartProps) {
       {view.onSpans.map(({ from, to }) => (
         <ReferenceArea key={from} x1={from} x2={to} className="review-on" />
       ))}
-      <Area dataKey="band" className="review-band" {...still} />
-      <Area dataKey="lack" className="review-lack" {...still} fill={`url(#${hatch})`} />
+      <Area dataKey="band" className="review-band" stroke="none" {...still} />
+      <Area
+        dataKey="lack"
+        className="review-lack"
+        stroke="none"
+        {...still}
+        fill={`url(#${hatch})`}
+      />
       <ReferenceLine y={view.targetKpa} className="review-target" />
       <Line dataKey="supply" className="review-supply" {...still} />
       <Line dataKey="tire" className="review-tire-edge" {...still} />
@@ -76,6 +82,7 @@ export function ReviewChart({ view, unit, width, height }: ReviewChartProps) {
       <YAxis
         type="number"
         domain={[ticks[0]!, ticks.at(-1)!]}
+        allowDataOverflow
         ticks={ticks}
         tickFormatter={(kpa: number) => axisFigure(kpa, unit)}
         width={frame.left}
@@ -104,16 +111,6 @@ const still = {
   isAnimationActive: false,
   tooltipType: 'none',
 } as const;
-
-/** Everything that is drawn lies between these, gauge kPa. */
-function pressureRange({ points, readings, targetKpa }: ChartView): [number, number] {
-  const all = [
-    targetKpa,
-    ...points.flatMap(({ band, tire }) => [...band, tire]),
-    ...readings.map(({ kpa }) => kpa),
-  ];
-  return [Math.min(...all), Math.max(...all)];
-}
 
 const axisFigure = (kpa: number, unit: PressureUnit) =>
   formatPressure(gaugeKpa(kpa), unit, {

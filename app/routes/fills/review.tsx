@@ -79,8 +79,8 @@ function traceOf({ startedAt, timeZone, setup, samples, log }: Review): ReviewTr
   };
 }
 
-export const meta: Route.MetaFunction<typeof loader> = ({ loaderData }) => {
-  const review = loaderData?.review;
+export const meta: Route.MetaFunction = ({ loaderData }) => {
+  const review = (loaderData as { review: Review } | undefined)?.review;
   const title = review ? `${positionName(review.position)}, ${review.coachName}` : 'Review';
   return [{ title: `${title} · Valveside` }];
 };
