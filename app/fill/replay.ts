@@ -8,7 +8,7 @@ import {
 } from '~/air';
 import { chuckSpans, type TimeSpan } from './chuck-spans';
 import { lastGaugedKpa } from './fill-summary';
-import { endOf, fillEventsOf, type RunLog } from './log';
+import { endOf, fillEventsOf, mergeLog, type RunLog } from './log';
 import type { Ending } from './wire-events';
 
 /** What the engine believed at one moment of a fill, gauge kPa. */
@@ -50,19 +50,24 @@ export interface Replayed {
 /** More samples than this show no more on a chart; a long fill is sampled more coarsely. */
 const mostSamples = 900;
 
+/** A fill that was left open says nothing more this long after its last tap, s. */
+const watchedS = 600;
+
 /**
  * Replays a fill's log by the engine, from its start to its end, or to the last event of a fill that
  * is open.
  * @throws RangeError from the engine, for a set-up or an event that it doesn't take
  */
 export function replayFill(setup: FillSetup, log: RunLog): Replayed {
-  const events = fillEventsOf(log);
+  // A log that comes from the server is by number; who was where when goes by time.
+  const events = fillEventsOf(mergeLog([], log));
   const end = endOf(log);
   const until = end ? end.atMs / 1000 : (events.at(-1)?.at ?? 0);
   const fill = createFill(setup);
   for (const event of events) fill.apply(event);
   const on = chuckSpans(events, until);
-  const samples = sampleTimes(events, until).map((at) => sampleOf(fill, at));
+  const watched = Math.min(until, (events.at(-1)?.at ?? 0) + watchedS);
+  const samples = sampleTimes(events, watched).map((at) => sampleOf(fill, at));
   const result = {
     ...figuresOf(setup, samples, on),
     endKpa: lastGaugedKpa(log),

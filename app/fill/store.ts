@@ -107,7 +107,7 @@ export function changeRound(
 /** Puts a fill in; the log of one that is known is merged by event id. */
 export function putRun(store: PhoneStore, run: RunState): void {
   const known = store.getState().runs[run.id];
-  const merged = known ? { ...known, log: mergeLog(known.log, run.log) } : run;
+  const merged = { ...(known ?? run), log: mergeLog(known?.log ?? [], run.log) };
   if (merged.log === known?.log) return;
   store.setState(({ runs }) => ({ runs: { ...runs, [run.id]: merged } }));
 }
