@@ -2,7 +2,7 @@ import { createHash } from 'node:crypto';
 import { existsSync, readdirSync, readFileSync, rmSync, statSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { projectRoot } from './paths';
-import { runVisibly, SetupError } from './run';
+import { runTool, SetupError } from './run';
 
 /** Everything that a build is made from. */
 const SOURCES = [
@@ -47,10 +47,9 @@ export function isBuilt(folder: string): boolean {
 export async function build(folder: string): Promise<void> {
   rmSync(stampOf(folder), { force: true });
   const hash = sourceHash();
-  const code = await runVisibly('npm', ['run', '--silent', 'build', '--', '--logLevel', 'warn'], {
-    ...process.env,
-    NODE_ENV: 'production',
-    VALVESIDE_BUILD_DIR: folder,
+  const code = await runTool('npm', ['run', '--silent', 'build'], {
+    env: { ...process.env, NODE_ENV: 'production', VALVESIDE_BUILD_DIR: folder },
+    quiet: true,
   });
   if (code !== 0) throw new SetupError('The build failed; its words stand above.');
   writeFileSync(stampOf(folder), hash);

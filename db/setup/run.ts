@@ -37,38 +37,49 @@ export async function runOrThrow(
   return output;
 }
 
-const visible = new Set<ChildProcess>();
+const tools = new Set<ChildProcess>();
+
+export interface ToolOptions {
+  readonly env?: NodeJS.ProcessEnv;
+  /** Keeps its lines to itself unless it fails. */
+  readonly quiet?: boolean;
+}
 
 /**
- * Runs a program of the project in its folder, with its lines on the terminal.
+ * Runs a tool of the project in its folder, with its lines on the terminal.
  * @returns its exit code
  */
-export function runVisibly(
+export function runTool(
   command: string,
   args: readonly string[],
-  env: NodeJS.ProcessEnv = process.env,
+  { env = process.env, quiet = false }: ToolOptions = {},
 ): Promise<number> {
-  // A group of its own, so that stopping it takes along whatever it started.
+  const output = quiet ? 'pipe' : 'inherit';
   const child = spawn(command, args, {
     cwd: projectRoot,
     env,
+    // A group of its own, so that stopping it takes along whatever it started.
     detached: true,
-    stdio: ['ignore', 'inherit', 'inherit'],
+    stdio: ['ignore', output, output],
   });
-  visible.add(child);
+  tools.add(child);
+  const kept: Buffer[] = [];
+  child.stdout?.on('data', (chunk: Buffer) => kept.push(chunk));
+  child.stderr?.on('data', (chunk: Buffer) => kept.push(chunk));
   return new Promise((resolve) => {
     const end = (code: number) => {
-      visible.delete(child);
+      if (code !== 0) process.stderr.write(Buffer.concat(kept));
+      tools.delete(child);
       resolve(code);
     };
     child.on('error', () => end(127));
-    child.on('exit', (code) => end(code ?? 1));
+    child.on('close', (code) => end(code ?? 1));
   });
 }
 
-/** Ends every program that `runVisibly` still waits for, with its descendants. */
-export function endVisible(): void {
-  for (const { pid } of visible) {
+/** Ends every tool that is still running, with its descendants. */
+export function endTools(): void {
+  for (const { pid } of tools) {
     try {
       if (pid) process.kill(-pid, 'SIGTERM');
     } catch {

@@ -1,4 +1,4 @@
-import { endVisible } from './run';
+import { endTools } from './run';
 
 interface Step {
   readonly name: string;
@@ -40,7 +40,7 @@ export class Stopping {
   }
 
   async #stopAll(): Promise<void> {
-    endVisible();
+    endTools();
     for (const { name, stop } of this.#steps.toReversed()) {
       try {
         await stop();

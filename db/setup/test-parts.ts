@@ -1,6 +1,6 @@
 import { existsSync, readFileSync } from 'node:fs';
 import { join } from 'node:path';
-import { runVisibly } from './run';
+import { runTool } from './run';
 import type { Stopping } from './stopping';
 import { startTestApp } from './test-app';
 import { testBuild } from './test-build';
@@ -36,13 +36,13 @@ export const parts = {
 export type PartName = keyof typeof parts;
 
 async function script(name: string): Promise<Counts> {
-  const code = await runVisibly('npm', ['run', '--silent', name]);
+  const code = await runTool('npm', ['run', '--silent', name]);
   return code === 0 ? { passed: 1, failed: 0 } : { passed: 0, failed: 1 };
 }
 
 async function vitest(project: string, { folder, rest }: Run): Promise<Counts> {
   const report = join(folder, `${project}.json`);
-  const code = await runVisibly('npx', [
+  const code = await runTool('npx', [
     ...['--no-install', 'vitest', 'run', '--project', project],
     ...['--reporter=default', '--reporter=json', `--outputFile.json=${report}`, ...rest],
   ]);
@@ -53,10 +53,8 @@ async function vitest(project: string, { folder, rest }: Run): Promise<Counts> {
 async function playwright(run: Run): Promise<Counts> {
   const report = join(run.folder, 'e2e.json');
   const env = await startTestApp(run);
-  const code = await runVisibly('npx', ['--no-install', 'playwright', 'test', ...run.rest], {
-    ...process.env,
-    ...env,
-    E2E_REPORT: report,
+  const code = await runTool('npx', ['--no-install', 'playwright', 'test', ...run.rest], {
+    env: { ...process.env, ...env, E2E_REPORT: report },
   });
   const stats = readReport(report).stats as Record<string, number> | undefined;
   const { expected = 0, unexpected = 0, flaky = 0 } = stats ?? {};
