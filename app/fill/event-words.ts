@@ -4,7 +4,7 @@ import type { NewFillEvent } from './live-driver';
 
 const speedWords = { off: 'Engine off', idle: 'Engine at idle', 'fast-idle': 'Fast idle set' };
 const sourceWords = {
-  'wheel-gauge': 'Gauge at the wheel',
+  'wheel-gauge': 'Gauge',
   'dash-gauge': 'Dash gauge',
   sensor: 'Sensor',
 };

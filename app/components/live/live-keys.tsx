@@ -1,5 +1,6 @@
 import { hoseGauge } from '~/fill/hose-gauge';
 import { moreGroups } from '~/fill/more-keys';
+import type { Notice } from '~/fill/notice';
 import type { ScreenState } from '~/fill/screen-state';
 import type { KeypadFor } from '~/fill/screen-ui';
 import { formatPressure, gaugeKpa, type PressureUnit } from '~/units';
@@ -15,7 +16,7 @@ type KeysProps = LiveScreenProps & { state: ScreenState };
 
 /** Everything under the picture: a question, the sheet of more, the keypad, or the usual keys. */
 export function LiveKeys(props: KeysProps) {
-  const { ui, handlers, facts, setup, last } = props;
+  const { ui, state, handlers, facts, setup, last } = props;
   if (ui.question) {
     return (
       <QuestionSheet
@@ -38,29 +39,35 @@ export function LiveKeys(props: KeysProps) {
   }
   return (
     <section className="live-keys" aria-label="Keys">
-      <Strip {...props} />
-      {ui.keypad ? <TypedGauge {...props} /> : <OfferedGauge {...props} />}
+      {/* While the pedal's words are read nothing else asks for the thumb. */}
+      {state.body === 'pedal-cautions' && !ui.keypad ? (
+        <AnswerKeys state={state} handlers={handlers} />
+      ) : (
+        <>
+          <Strip {...props} />
+          {ui.keypad ? <TypedGauge {...props} /> : <OfferedGauge {...props} />}
+        </>
+      )}
     </section>
   );
 }
 
 function Strip(props: KeysProps) {
   const { ui, state, handlers, clock, last, hint, setup, unit, shows } = props;
-  const first = hint && !last ? { text: hint, isHint: true } : undefined;
+  const first: Notice | undefined = hint && !last ? { text: hint, isHint: true } : undefined;
   const entered = ui.entered && ui.entered.until > clock ? ui.entered : undefined;
+  const notice = ui.keypad ? undefined : (first ?? state.notice);
+  const hasKey = Boolean(entered?.id ?? (!entered && notice?.done));
+  const reads = gaugeNames[hoseGauge(setup)];
+  const gauge = hasKey ? reads.split(' ')[0] : reads;
   return (
     <NoticeStrip
       entered={entered}
-      notice={ui.keypad ? undefined : (first ?? state.notice)}
+      notice={notice}
       label={
-        !ui.keypad &&
-        state.body !== 'pedal-cautions' && (
+        !ui.keypad && (
           <GaugeLabel
-            label={
-              state.readNow
-                ? `${gaugeNames[hoseGauge(setup)]} now, ${unit}?`
-                : labelOf(hoseGauge(setup), unit)
-            }
+            label={state.readNow ? `${gauge} now, ${unit}?` : `${gauge} reads, ${unit}`}
             isWanted={state.readNow}
             shows={shows?.hose}
           />
@@ -81,13 +88,11 @@ function OfferedGauge({ ui, state, handlers, setup, unit }: KeysProps) {
   }));
   return (
     <>
-      {state.body !== 'pedal-cautions' && (
-        <GaugeKeys
-          values={values}
-          onPick={handlers.pickOffered}
-          note={state.airMoves ? 'The gauge reads lower while air moves.' : undefined}
-        />
-      )}
+      <GaugeKeys
+        values={values}
+        onPick={handlers.pickOffered}
+        note={state.airMoves ? 'The gauge reads lower while air moves.' : undefined}
+      />
       <div className="key-row key-row-low" data-count="3">
         <PressKey onPress={() => handlers.openKeypad(reads)}>Other value</PressKey>
         <PressKey onPress={(down) => handlers.record({ type: 'cut-out' }, down.at)}>

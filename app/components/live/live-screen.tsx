@@ -23,8 +23,8 @@ export function LiveScreen(props: LiveScreenProps) {
         <LiveHead {...props} />
         {props.strip}
         {state ? <CallPanel state={state} /> : <FirstPanel />}
-        {body === 'vessel' && (
-          <section className="live-body" aria-label="Level">
+        {body !== 'pedal-cautions' && (
+          <section className="live-body live-level" aria-label="Level">
             {state && <LiveVessel vessel={state.vessel} bare={state.act} />}
           </section>
         )}

@@ -18,6 +18,7 @@ export interface NoticeStripProps {
 export function NoticeStrip(props: NoticeStripProps) {
   const { entered, notice, label } = props;
   const kind = entered ? 'entered' : kindOf(notice);
+  if (kind === 'none' && !label) return null;
   return (
     <div className="notice" data-kind={kind}>
       <div className="notice-words">

@@ -48,7 +48,7 @@ function PracticeFill({ source }: { source: PracticeSource }) {
           tire: now.tireKpa === undefined ? '–' : shown(now.tireKpa),
         }
       }
-      way={<Link to="/practice?start=choose">Situations</Link>}
+      way={<Link to="/practice?start=choose">Change</Link>}
       strip={<PracticeStrip source={source} now={now} />}
     />
   );
