@@ -48,7 +48,7 @@ export interface Replayed {
 }
 
 /** More samples than this show no more on a chart; a long fill is sampled more coarsely. */
-const mostSamples = 900;
+const mostSamples = 400;
 
 /** A fill that was left open says nothing more this long after its last tap, s. */
 const watchedS = 600;
