@@ -1,4 +1,5 @@
 import { Outlet } from 'react-router';
+import { OutboxStrip } from '~/components/outbox/outbox-strip';
 import { CoachNav, type CoachPage } from '~/components/shell/coach-nav';
 import { PageShell } from '~/components/shell/page-shell';
 import { loadCoach } from '~/queries/coach.server';
