@@ -1,9 +1,12 @@
 import { Link } from 'react-router';
 import { PageShell } from '~/components/shell/page-shell';
 import { practiceSituations } from '~/fill/practice-starts';
+import { formatPressure, type PressureUnit, psi, psiToKpa } from '~/units';
 
 /** The situations to choose from. */
-export function PracticeList() {
+export function PracticeList({ unit }: { unit: PressureUnit }) {
+  const shown = (value: number, withUnit: boolean) =>
+    formatPressure(psiToKpa(psi(value)), unit, { withUnit, trim: true });
   return (
     <PageShell narrow>
       <h1>Practice</h1>
@@ -16,7 +19,7 @@ export function PracticeList() {
             <Link to={`/practice?start=${key}`}>
               <b>{name}</b>
               <span>
-                {startPsi} → {targetPsi} psi
+                {shown(startPsi, false)} → {shown(targetPsi, true)}
               </span>
             </Link>
             <p>{about}</p>

@@ -11,7 +11,7 @@ export default function Practice() {
   const [run, setRun] = useState({ count: 1, seed: 1 });
   const unit = usePressureUnit();
   const chosen = search.get('start');
-  if (chosen === 'choose') return <PracticeList />;
+  if (chosen === 'choose') return <PracticeList unit={unit} />;
   const situation = findSituation(chosen);
   return (
     <PracticeRun
