@@ -21,6 +21,18 @@ export const USUAL: Habits = {
   every: null,
 };
 
+/** The departures that are printed side by side. */
+export const VARIANTS: [string, Habits][] = [
+  ['usual', USUAL],
+  ['dash gauge only', { ...USUAL, dashOnly: true }],
+  ['every 6 s', { ...USUAL, every: 6 }],
+  ['every 12 s', { ...USUAL, every: 12 }],
+  ['every 24 s', { ...USUAL, every: 24 }],
+  ['no purge heard', { ...USUAL, noPurge: true }],
+  ['alone', { ...USUAL, alone: true }],
+  ['helper comes and goes', { ...USUAL, comeAndGo: true }],
+];
+
 /** Seconds that things take; each draw is one act. About two from call to air (design/engine.md). */
 export const TAKES = {
   notice: (dice: Dice) => Math.min(4, around(dice, 0.9, 0.3)),

@@ -25,14 +25,18 @@
  * from 1 000 000 on: not to be used while tuning), --people-only, --product-only, --who <actor>,
  * --quick (12 coaches), --rounds N (2), --alone, --come-and-go, --dash-only, --every <seconds> (a
  * reading so often, instead of when asked), --no-purge, --json, --workers N (1),
+ * --variants (the product under each departure, side by side, one round),
  * --trace <coach>:<tire> (one fill's timeline; tires 5 to 8 are the next round's; --who all-seeing
  * traces the floor), --speed (milliseconds, beside a reference integration).
  */
+
+import { type Habits, VARIANTS } from './habits';
 import { type Job, runJob } from './job';
 import { type Options, readOptions, type Who } from './options';
+import type { FillOutcome } from './outcome';
 import { runAll } from './pool';
 import { printSpeed } from './speed';
-import { columnOf, tableOf, worstOf } from './table';
+import { type Column, columnOf, tableOf, worstOf } from './table';
 import { tracer } from './trace';
 
 const WORST_SHOWN = 12;
@@ -52,31 +56,49 @@ async function trace(options: Options, { coach, tire, who }: NonNullable<Options
   console.log({ ...end, asked: adviseMs.length });
 }
 
+interface Group {
+  who: Who;
+  title: string;
+  habits: Habits;
+  rounds: number;
+}
+
 async function compare(options: Options): Promise<void> {
   const from = performance.now();
-  const jobs = options.who.flatMap((who) => jobsFor(who, options));
-  const results = await runAll(jobs, options.workers, (done) => showProgress(done, jobs.length));
-  const fillsOf = (who: Who) =>
-    results.filter(({ job }) => job.who === who).flatMap(({ outcomes }) => outcomes);
-  const columns = options.who.map((who) => columnOf(who, fillsOf(who)));
-  if (options.json) {
-    console.log(JSON.stringify({ options, columns }, null, 2));
-    return;
-  }
-  console.log(titleOf(options));
-  console.log(tableOf(columns));
-  const last = options.who[options.who.length - 1]!;
-  console.log(`\nWorst of ${last} (look with --trace <coach>:<tire>):`);
-  for (const line of worstOf(fillsOf(last), WORST_SHOWN)) console.log(`  ${line}`);
-  console.log(
-    `\n${((performance.now() - from) / 1000).toFixed(0)} s on ${options.workers} worker(s)`,
+  const groups = groupsOf(options);
+  const jobs = groups.map((group) => jobsFor(group, options));
+  const flat = jobs.flat();
+  const results = await runAll(flat, options.workers, (done) => showProgress(done, flat.length));
+  const fills = jobs.map((own) => {
+    const mine = new Set(own);
+    return results.filter(({ job }) => mine.has(job)).flatMap(({ outcomes }) => outcomes);
+  });
+  const columns = groups.map(({ who, title }, i) => columnOf(who, fills[i]!, title));
+  if (options.json) console.log(JSON.stringify({ options, columns }, null, 2));
+  else print(options, columns, fills[fills.length - 1]!);
+  console.error(
+    `${((performance.now() - from) / 1000).toFixed(0)} s, ${options.workers} process(es)`,
   );
 }
 
-function jobsFor(who: Who, options: Options): Job[] {
+function groupsOf({ who, habits, rounds, variants }: Options): Group[] {
+  if (!variants) return who.map((one) => ({ who: one, title: one, habits, rounds }));
+  return VARIANTS.map(([title, own]) => ({ who: 'product', title, habits: own, rounds: 1 }));
+}
+
+function print(options: Options, columns: Column[], last: FillOutcome[]): void {
+  console.log(titleOf(options));
+  console.log(tableOf(columns));
+  console.log(
+    `\nWorst of ${columns[columns.length - 1]!.title} (look with --trace <coach>:<tire>):`,
+  );
+  for (const line of worstOf(last, WORST_SHOWN)) console.log(`  ${line}`);
+}
+
+function jobsFor({ who, habits, rounds }: Group, options: Options): Job[] {
   const person = who === 'plain' || who === 'expert';
   const coaches = person ? options.peopleCoaches : options.coaches;
-  const { habits, rounds, from } = options;
+  const { from } = options;
   return Array.from({ length: coaches }, (_, i) => ({ who, coach: from + i, rounds, habits }));
 }
 

@@ -15,6 +15,8 @@ export interface Options {
   who: Who[];
   json: boolean;
   speed: boolean;
+  /** The product alone under each of VARIANTS, side by side. */
+  variants: boolean;
   trace: { coach: number; tire: number; who: Who } | null;
 }
 
@@ -37,6 +39,7 @@ const FLAGS = {
   workers: { type: 'string' },
   json: { type: 'boolean' },
   speed: { type: 'boolean' },
+  variants: { type: 'boolean' },
   trace: { type: 'string' },
   who: { type: 'string' },
 } as const;
@@ -66,6 +69,7 @@ export function readOptions(argv: string[]): Options {
     who,
     json: values.json ?? false,
     speed: values.speed ?? false,
+    variants: values.variants ?? false,
     trace: traceOf(values.trace, who),
   };
 }

@@ -44,7 +44,7 @@ export function playPerfect(
 ): PerfectResult {
   const never: Policy = { lowerBelowKpa: 0, by: null };
   let best: PerfectResult = { seconds: Number.POSITIVE_INFINITY, policy: never };
-  for (const policy of [never, ...lowering(world)]) {
+  for (const policy of [...lowering(world), never]) {
     const seconds = playPolicy(copyWorld(world), policy, Math.min(best.seconds, longestS), hands);
     if (seconds < best.seconds) best = { seconds, policy };
   }

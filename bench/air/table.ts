@@ -5,6 +5,7 @@ import type { FillOutcome } from './outcome';
 /** A column group: first tire of a coach without a profile, later tires, and a later round. */
 export interface Column {
   who: Who;
+  title: string;
   first: Figures;
   later: Figures;
   next: Figures | null;
@@ -16,12 +17,13 @@ export interface Column {
 
 const TIRES = 4;
 
-export function columnOf(who: Who, fills: readonly FillOutcome[]): Column {
+export function columnOf(who: Who, fills: readonly FillOutcome[], title: string = who): Column {
   const next = fills.filter((fill) => fill.tire >= TIRES);
   const firstRound = fills.filter((fill) => fill.tire < TIRES);
   const ms = fills.flatMap((fill) => fill.adviseMs);
   return {
     who,
+    title,
     first: figuresOf(firstRound.filter((fill) => fill.tire === 0)),
     later: figuresOf(firstRound.filter((fill) => fill.tire > 0)),
     next: next.length > 0 ? figuresOf(next) : null,
@@ -69,18 +71,17 @@ const ROWS: [string, Cell, string][] = [
   ['perfect player, seconds, median', plain('perfectMedianS', 0), ''],
 ];
 
-const COUNTED = {
-  plain: new Set([
-    'all taps, median',
-    '80 % band holds supply',
-    '80 % band holds tire',
-    'passed the limit',
-  ]),
-};
+/** Rows that mean nothing for people without the product. */
+const NOT_OF_PEOPLE = new Set([
+  'all taps, median',
+  'passed the limit',
+  '80 % band holds supply',
+  '80 % band holds tire',
+]);
 
 /** The table as Markdown: first tire / later tires / the next round (product only). */
 export function tableOf(columns: readonly Column[]): string {
-  const head = ['figure: first / later tires', ...columns.map(title), 'goal'];
+  const head = ['figure: first / later tires', ...columns.map(headOf), 'goal'];
   const rows = ROWS.map(([name, cell, goal]) => [
     name,
     ...columns.map((column) => cells(column, name, cell)),
@@ -89,19 +90,19 @@ export function tableOf(columns: readonly Column[]): string {
   const timed = columns.filter((column) => column.who === 'product');
   const speed = timed.map(
     (column) =>
-      `advise: median ${column.adviseP50Ms.toFixed(2)} ms, p99 ${column.adviseP99Ms.toFixed(2)} ms, ` +
+      `advise, ${column.title}: median ${column.adviseP50Ms.toFixed(2)} ms, p99 ${column.adviseP99Ms.toFixed(2)} ms, ` +
       `longest ${column.adviseMaxMs.toFixed(1)} ms (goal: p99 4 ms)`,
   );
   return [...layOut([head, ...rows]), '', ...speed].join('\n');
 }
 
-function title({ who, next }: Column): string {
-  return next ? `${who} / next round` : who;
+function headOf({ title, next }: Column): string {
+  return next ? `${title} / next round` : title;
 }
 
 function cells(column: Column, name: string, cell: Cell): string {
   const person = column.who === 'plain' || column.who === 'expert';
-  if (person && COUNTED.plain.has(name)) return '–';
+  if (person && NOT_OF_PEOPLE.has(name)) return '–';
   const both = `${cell(column.first)} / ${cell(column.later)}`;
   const all =
     name.startsWith('hard') || name.startsWith('said') ? ` (all ${cell(column.all)})` : '';

