@@ -1,4 +1,4 @@
-import { describe, expect, it } from 'vitest';
+import { describe, expect, it, vi } from 'vitest';
 import { drawCoach } from './coach';
 import { roundsByCrew } from './crew-round';
 import { figuresOf, quantile } from './figures';
@@ -17,6 +17,9 @@ const round = (id: number, habits: Habits = USUAL) =>
 
 const untimed = (fills: ReturnType<typeof round>) =>
   fills.map((fill) => ({ ...fill, adviseMs: [] }));
+
+/** Whole rounds are simulated: slow on a machine that is busy with other things, ms. */
+vi.setConfig({ testTimeout: 60_000 });
 
 describe('a crew that follows the all-seeing adviser', () => {
   it.each(REACHABLE)('ends each tire of coach %i gauged within tolerance', (id) => {
@@ -37,7 +40,8 @@ describe('a crew that follows the all-seeing adviser', () => {
   });
 
   it('gets done alone, with the pedal a walk away', () => {
-    const alone = round(7, { ...USUAL, alone: true });
+    const alone = round(13, { ...USUAL, alone: true }).filter((fill) => fill.reachable);
+    expect(alone.length).toBe(2);
     for (const fill of alone) expect(fill).toMatchObject({ done: true, proven: true });
   });
 });
