@@ -6,6 +6,9 @@ import { createLoginSession, createUser } from '../tests/factories/user';
 import { cookieOf } from './database';
 import { query } from './setup/server';
 
+// Two cores may be shared with a build.
+test.setTimeout(120_000);
+
 async function signIn(page: Page, userId: string): Promise<void> {
   await page.context().addCookies([cookieOf(await createLoginSession(userId))]);
 }
@@ -103,7 +106,7 @@ test('an owner describes the air, and the coach is ready for its first fill', as
   const { coachId } = await createCoach(owner.id, { rig: null, outcome: null });
   await signIn(page, owner.id);
   await open(page, `/coaches/${coachId}/air`);
-  await page.getByLabel('Hose').fill('Grey hose, 15 m');
+  await page.getByLabel('Hose', { exact: true }).fill('Grey hose, 15 m');
   await page.getByLabel('Chuck', { exact: true }).fill('Closed clip-on');
   await page.getByLabel('Gauge', { exact: true }).fill('Tee gauge');
   await page.getByRole('radio', { name: /On the hose, before the ball valve/ }).check();

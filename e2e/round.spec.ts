@@ -7,6 +7,9 @@ import { createLoginSession, createUser } from '../tests/factories/user';
 import { cookieOf } from './database';
 import { query } from './setup/server';
 
+// Two cores may be shared with a build.
+test.setTimeout(120_000);
+
 async function signIn(page: Page, userId: string): Promise<void> {
   await page.context().addCookies([cookieOf(await createLoginSession(userId))]);
 }
