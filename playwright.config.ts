@@ -41,7 +41,7 @@ export default defineConfig({
   },
   projects: [
     { name: 'phone', use: { viewport: PHONE, hasTouch: true, isMobile: true } },
-    // What people do at the tire is done on a phone.
-    { name: 'desk', testIgnore: /\.phone\.spec\.ts$/, use: { viewport: DESK } },
+    // What people do at the tire is done on a phone; whom a route lets in depends on no size.
+    { name: 'desk', testIgnore: /(\.phone|access)\.spec\.ts$/, use: { viewport: DESK } },
   ],
 });

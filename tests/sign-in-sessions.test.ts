@@ -84,7 +84,8 @@ test('signing out ends the row and takes the cookie away', async () => {
   const context = new RouterContextProvider();
   const request = requestWith(cookie);
   await provideViewer({ request, context }, async () => new Response());
-  const answer = await logout({ request, context } as Parameters<typeof logout>[0]);
+  const url = new URL(request.url);
+  const answer = await logout({ request, context, url, params: {}, pattern: '/logout' });
   expect(answer.headers.get('Set-Cookie')).toMatch(/^valveside-session=[^;]*; Max-Age=0/);
   expect(await findViewer(requestWith(cookie))).toBeNull();
 });

@@ -15,6 +15,8 @@ export const securityHeaders: MiddlewareFunction<Response> = async ({ context },
   const response = await next();
   const headers = response.headers;
   headers.set('Content-Security-Policy', contentPolicy(nonce));
+  // Pages hold one person's figures: nothing between here and the browser may keep them.
+  if (!headers.has('Cache-Control')) headers.set('Cache-Control', 'private, no-cache');
   headers.set('X-Content-Type-Options', 'nosniff');
   headers.set('Referrer-Policy', 'same-origin');
   headers.set('Permissions-Policy', 'camera=(self), geolocation=(), microphone=()');

@@ -30,8 +30,10 @@ export async function requireViewer(
 ): Promise<Viewer> {
   const viewer = await viewerOf(context);
   if (viewer) return viewer;
+  // A request for a page's data alone has an address of its own; back leads to the page.
   const url = new URL(request.url);
-  const back = url.pathname.replace(/\.data$/, '') + url.search;
+  url.searchParams.delete('_routes');
+  const back = url.pathname.replace(/(\/_)?\.data$/, (_, root) => (root ? '/' : '')) + url.search;
   throw redirect(`/login?to=${encodeURIComponent(back)}`);
 }
 
