@@ -51,7 +51,7 @@ export function ReviewChart({ view, unit, width, height }: ReviewChartProps) {
           <path className="review-hatch" d="M-2 11L11-2M-2 2L2-2M7 11L11 7" />
         </pattern>
       </defs>
-      <CartesianGrid vertical={false} className="review-grid" />
+      <CartesianGrid vertical={false} />
       {view.onSpans.map(({ from, to }) => (
         <ReferenceArea key={from} x1={from} x2={to} className="review-on" />
       ))}
@@ -77,6 +77,7 @@ export function ReviewChart({ view, unit, width, height }: ReviewChartProps) {
         tickLine={false}
         height={1}
         interval={0}
+        tick={inInk}
         fontSize={frame.letters}
       />
       <YAxis
@@ -89,6 +90,7 @@ export function ReviewChart({ view, unit, width, height }: ReviewChartProps) {
         tickLine={false}
         axisLine={false}
         interval={0}
+        tick={inInk}
         fontSize={frame.letters}
       />
       <text className="review-unit" x={0} y={14} fontSize={frame.letters}>
@@ -103,6 +105,9 @@ export function ReviewChart({ view, unit, width, height }: ReviewChartProps) {
     </ComposedChart>
   );
 }
+
+/** The library's own grey is too weak in both themes. */
+const inInk = { fill: 'var(--ink)' };
 
 const still = {
   type: 'linear',
