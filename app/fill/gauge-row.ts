@@ -24,9 +24,9 @@ export interface RowWish {
 }
 
 /** No value changes within this many seconds before a press; one that did is asked about. */
-export const settleSeconds = 1.5;
+const settleSeconds = 1.5;
 /** After as many middle values in a row the next reading is typed: a thumb that only agrees. */
-export const middlesBeforeTyping = 3;
+const middlesBeforeTyping = 3;
 
 /** Values around the forecast, wide apart while the forecast is. */
 export function offerRow({ forecast, gaugeStepKpa, count }: RowWish, middles = 0): GaugeRow {

@@ -9,7 +9,7 @@ import { nextOf, whyOf } from './reason-words';
 import { type VesselState, vesselOf, whole } from './vessel-state';
 
 /** What takes the middle of the screen: the vessel, a keypad, or the pedal's safety words. */
-export type Body = 'vessel' | 'tire-keypad' | 'pedal-cautions';
+type Body = 'vessel' | 'tire-keypad' | 'pedal-cautions';
 
 /** Everything that the live screen shows, derived: nothing here is kept. */
 export interface ScreenState {

@@ -5,7 +5,7 @@ import type { NewFillEvent } from './live-driver';
 
 export type KeypadFor = 'wheel-gauge' | 'dash-gauge' | 'tire';
 
-export interface Keypad {
+interface Keypad {
   reads: KeypadFor;
   text: string;
   /** What was wrong with the last try, beside the field. */

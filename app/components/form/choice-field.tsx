@@ -1,6 +1,6 @@
 import { type FieldFrame, fieldId } from './field';
 
-export interface Choice {
+interface Choice {
   value: string;
   label: string;
   hint?: string;

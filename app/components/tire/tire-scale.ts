@@ -1,7 +1,7 @@
 import type { PressureUnit } from '~/units';
 
 /** How far a small vessel reaches below and above its target, in the person's unit. */
-export const vesselReach: Record<PressureUnit, { below: number; above: number }> = {
+const vesselReach: Record<PressureUnit, { below: number; above: number }> = {
   psi: { below: 14, above: 6 },
   kPa: { below: 100, above: 40 },
   bar: { below: 1, above: 0.4 },
