@@ -30,7 +30,7 @@ function cabTask({ cab, call }: Advice, facts: LogFacts): Notice | undefined {
     case 'set-fast-idle':
       return {
         text: say('set fast idle.'),
-        done: { label: 'It’s set', event: { type: 'engine', speed: 'fast-idle' } },
+        done: { label: 'Fast idle set', event: { type: 'engine', speed: 'fast-idle' } },
       };
     case 'read-dash':
       return {

@@ -71,6 +71,11 @@ function FirstPanel() {
     <section className="call-panel" aria-label="Call">
       <h1>One moment</h1>
       <p className="call-why">The screen is starting.</p>
+      <noscript>
+        <p className="call-why">
+          It needs scripts: the phone itself says when to put the chuck on.
+        </p>
+      </noscript>
     </section>
   );
 }
