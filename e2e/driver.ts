@@ -9,6 +9,17 @@ const handsS = 1.5;
 /** Unasked, a gauge is read this often, s. */
 const readEveryS = 20;
 
+/** React renders in messages of its own, which the held clock does not hold: two turns let it end. */
+const painted = async () => {
+  for (let turn = 0; turn < 2; turn++) {
+    await new Promise((resolve) => {
+      const { port1, port2 } = new MessageChannel();
+      port1.onmessage = resolve;
+      port2.postMessage(0);
+    });
+  }
+};
+
 /**
  * A driver with a helper, at a coach that the engine's own step function runs. Looks at the live
  * screen, does what it says and taps what that coach's gauges read. The page's clock and the coach
@@ -44,6 +55,7 @@ export class Driver {
   async #tick(): Promise<void> {
     const heard = this.coach.advance(tickS);
     await this.page.clock.runFor(tickS * 1000);
+    await this.page.evaluate(painted);
     if (heard.some(({ type }) => type === 'cut-out')) await this.#press('It purged');
   }
 

@@ -78,7 +78,8 @@ describe('what a fill starts from', () => {
       tire: {
         startKpa: 700,
         targetKpa: 758,
-        toleranceKpa: 7,
+        // Half of the coach's.
+        toleranceKpa: 3.5,
         volumeL: 140,
         limitKpa: 827,
         warm: false,

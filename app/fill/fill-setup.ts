@@ -55,6 +55,12 @@ export interface NextFill {
 }
 
 /**
+ * A fill ends closer to its target than the cold check asks: else it could end where the next cool
+ * morning calls for air again (our choice).
+ */
+const fillShareOfTolerance = 0.5;
+
+/**
  * What the engine starts from, for the next tire of a round. The fill before hands on the state of
  * the supply and what it has learned; else the coach's kept profile is the prior.
  * It passes through JSON once, so that this phone starts from the very bits that are stored.
@@ -66,7 +72,7 @@ export function composeFillSetup(next: NextFill): FillSetup {
     tire: {
       startKpa,
       targetKpa: wheel.targetKpa,
-      toleranceKpa: coach.toleranceKpa,
+      toleranceKpa: coach.toleranceKpa * fillShareOfTolerance,
       volumeL: wheel.volumeL,
       limitKpa: wheel.limitKpa,
       warm,
