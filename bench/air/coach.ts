@@ -185,7 +185,7 @@ function drawGauge(dice: Dice, biasPsi: number, stepPsi: number, noisePsi: numbe
 }
 
 /** The highest pressure that the fitting sees, jitter aside. */
-export function peakKpa(air: Pick<Coach, 'cutOutKpa' | 'checkCrackKpa' | 'fitting'>): number {
+function peakKpa(air: Pick<Coach, 'cutOutKpa' | 'checkCrackKpa' | 'fitting'>): number {
   const checks = air.fitting === 'supply' ? 0 : air.fitting === 'service' ? 1 : 2;
   return air.cutOutKpa - checks * air.checkCrackKpa;
 }

@@ -87,6 +87,7 @@ function fillTire(walk: Walk, plan: CrewPlan, index: number, tire: number): Fill
     return runFill(world, newAllSeeing(world, hands), { ...shared, watch });
   }
   const setup = setupFor(walk, plan.habits, dice, pause);
+  watch?.began?.(setup);
   const fill = plan.createFill(setup);
   const outcome = runFill(world, fill, { ...shared, watch });
   const endedAt = outcome.seconds;

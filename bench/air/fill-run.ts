@@ -1,4 +1,4 @@
-import type { Advice, Adviser } from './adviser';
+import type { Advice, Adviser, FillSetup } from './adviser';
 import { type Alone, newAlone, stepAlone } from './alone';
 import { type Driver, newDriver, stepDriver } from './driver';
 import { withinTolerance } from './gauges';
@@ -55,6 +55,7 @@ export interface Run {
 
 /** What a tracer is told. */
 export interface Watch {
+  began?: (setup: FillSetup) => void;
   asked?: (run: Run, advice: Advice) => void;
   stepped?: (run: Run) => void;
 }

@@ -16,6 +16,7 @@ export function tracer(print: (line: string) => void): Watch {
   let printedAt = Number.NEGATIVE_INFINITY;
   let said = '';
   return {
+    began: (setup) => print(describeSetup(setup)),
     asked: (run, advice) => {
       if (printedAt === Number.NEGATIVE_INFINITY) {
         listenIn(run, print);
@@ -92,7 +93,7 @@ function heading(world: World): string[] {
 }
 
 /** What the product was told before the first tap. */
-export function describeSetup(setup: FillSetup): string {
+function describeSetup(setup: FillSetup): string {
   const { profile, supply, ...rest } = setup;
   const known =
     [profile && 'profile', supply && 'supply'].filter(Boolean).join(' and ') || 'nothing';

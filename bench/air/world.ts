@@ -91,7 +91,7 @@ function tank(coach: Coach, volumeL: number, gaugeKpa: number): Vessel {
   return { amount: (gaugeKpa + coach.atmosphereKpa) * volumeL, volumeL, warmth: 0, ...TANK_WARMTH };
 }
 
-export function tireVessel(coach: Coach, tire: WorldTire): Vessel {
+function tireVessel(coach: Coach, tire: WorldTire): Vessel {
   return {
     amount: (tire.startKpa + coach.atmosphereKpa) * tire.volumeL,
     volumeL: tire.volumeL,
@@ -121,7 +121,7 @@ export function copyWorld(world: World): World {
   };
 }
 
-export function fittingVessel(world: World): Vessel {
+function fittingVessel(world: World): Vessel {
   const { fitting } = world.coach;
   if (fitting === 'supply') return world.supply;
   return fitting === 'service' ? world.service : world.accessory;
