@@ -3,6 +3,7 @@ import { afterAll, describe, expect, it } from 'vitest';
 import { appendEvents } from '~/commands/append-events.server';
 import { resultsSettled } from '~/commands/compute-result.server';
 import { Run } from '~/models/run.server';
+import { loadFill } from '~/queries/fill.server';
 import { loadLog, readEvents } from '~/queries/run-log.server';
 import { stopReplayPool } from '~/services/replay-pool.server';
 import { addMember } from './factories/coach';
@@ -83,6 +84,20 @@ describe('appending events', () => {
     expect((await readEvents(actor, runId, 3)).events.map(({ seq }) => seq)).toEqual([4, 5]);
   });
 
+  it('answers a very long log in parts, and gives the page all of it', async () => {
+    const { actor, runId } = await createOpenFill();
+    const answers = [];
+    for (let batch = 0; batch < 5; batch++) {
+      answers.push(await appendEvents(actor, runId, batchOf(readingsOf(500))));
+    }
+    expect(answers.at(-1)?.lastSeq).toBe(2500);
+    const first = await readEvents(actor, runId, 0);
+    expect([first.events.length, first.lastSeq]).toEqual([2000, 2500]);
+    const rest = await readEvents(actor, runId, 2000);
+    expect(rest.events.map(({ seq }) => seq)).toEqual(upTo(2500).slice(2000));
+    expect((await loadFill(actor, runId)).run.log).toHaveLength(2500);
+  });
+
   it('refuses an id with another body, names the places and stores nothing of the batch', async () => {
     const { actor, runId } = await createOpenFill();
     const [first, second, third] = readingsOf(3);
@@ -156,6 +171,7 @@ describe('who may append', () => {
     const missing = { status: 404, code: 'fill-not-found' };
     await expect(appendEvents(stranger, runId, batch)).rejects.toMatchObject(missing);
     await expect(appendEvents(stranger, randomUUID(), batch)).rejects.toMatchObject(missing);
+    await expect(loadFill(viewer, 'no-id')).rejects.toMatchObject(missing);
     expect((await readEvents(viewer, runId, 0)).events).toEqual([]);
     await expect(readEvents(stranger, runId, 0)).rejects.toMatchObject(missing);
   });

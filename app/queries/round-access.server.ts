@@ -1,5 +1,6 @@
 import type { Transaction } from 'sequelize';
 import type { Action, Actor } from '~/access/can';
+import { idField } from '~/fill/wire-fields';
 import { Round } from '~/models/round.server';
 import { Run } from '~/models/run.server';
 import { notFound, Refusal } from '~/services/refusal.server';
@@ -21,7 +22,7 @@ export async function requireRound(
   roundId: string,
   reach?: Reach,
 ): Promise<Round> {
-  const round = await Round.findByPk(roundId, reading(reach));
+  const round = isId(roundId) ? await Round.findByPk(roundId, reading(reach)) : null;
   if (!round) throw notFound('round');
   await requireCoachOf('round', actor, action, round.coachId, reach);
   return round;
@@ -37,11 +38,14 @@ export async function requireRun(
   runId: string,
   reach?: Reach,
 ): Promise<Run> {
-  const run = await Run.findByPk(runId, reading(reach));
+  const run = isId(runId) ? await Run.findByPk(runId, reading(reach)) : null;
   if (!run) throw notFound('fill');
   await requireCoachOf('fill', actor, action, run.coachId, reach);
   return run;
 }
+
+/** Anything can stand in the address of a page; PostgreSQL takes only a UUID for an id. */
+const isId = (text: string) => idField.safeParse(text).success;
 
 const reading = (reach: Reach | undefined) =>
   reach

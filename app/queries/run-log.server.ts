@@ -16,11 +16,11 @@ export function toWireEvent(row: RunEvent): WireEvent {
 }
 
 /** A fill's log after the number `after`, by number. */
-export async function loadLog(runId: string, after = 0): Promise<StoredEvent[]> {
+export async function loadLog(runId: string, after = 0, most?: number): Promise<StoredEvent[]> {
   const rows = await RunEvent.findAll({
     where: { runId, seq: { [Op.gt]: after } },
     order: [['seq', 'ASC']],
-    limit: longestAnswer,
+    ...(most === undefined ? {} : { limit: most }),
   });
   return rows.map((row) => ({
     seq: row.seq,
@@ -43,7 +43,7 @@ export async function readEvents(
   // The fill is read first: what is appended meanwhile shows as a lastSeq that is behind, never as
   // a gap, since numbers commit in their order.
   const run = await requireRun(actor, 'fill:see', runId);
-  const events = await loadLog(runId, after);
+  const events = await loadLog(runId, after, longestAnswer);
   const lastSeq = Math.max(run.lastSeq, events.at(-1)?.seq ?? 0);
   return { events, lastSeq, endedSeq: run.endedSeq };
 }
