@@ -1,12 +1,16 @@
+import { randomUUID } from 'node:crypto';
 import { expect, test } from 'vitest';
+import { createFill, ENGINE_VERSION } from '~/air';
 import { appendEvents } from '~/commands/append-events.server';
 import { setTargets } from '~/commands/set-targets.server';
+import { AirProfileRow } from '~/models/air-profile.server';
+import { loadLearnedAir } from '~/queries/air-profile.server';
 import { loadTireStates } from '~/queries/coach-overview.server';
 import { loadHistory, roundsOnPage } from '~/queries/history.server';
 import { kpaPerPsi } from '~/units';
 import { addMember, createCoach } from './factories/coach';
 import { createRound } from './factories/round';
-import { batchOf, createFillFor, eventOf } from './factories/run';
+import { batchOf, createFillFor, eventOf, usualSetup } from './factories/run';
 import { createUser } from './factories/user';
 
 const psi = (value: number) => value * kpaPerPsi;
@@ -106,4 +110,21 @@ test('a helper may not read the history, and a viewer may', async () => {
   const viewer = await addMember(coach.coachId, (await createUser()).id, 'viewer');
   await expect(loadHistory(helper, coach.coachId, 1)).rejects.toMatchObject({ status: 403 });
   expect((await loadHistory(viewer, coach.coachId, 1)).rounds).toHaveLength(1);
+});
+
+test('what was learned of the air is told as the engine’s own profile has it', async () => {
+  const { coachId } = await oldCoach();
+  expect(await loadLearnedAir(coachId)).toBeNull();
+  const profile = createFill(usualSetup).profile();
+  const row = { coachId, rigKey: 'a|b|c', schemaVersion: profile.schema, profile };
+  await AirProfileRow.create({ id: randomUUID(), engineVersion: ENGINE_VERSION, ...row });
+  const learned = await loadLearnedAir(coachId);
+  expect(learned).toMatchObject({ fills: 1, hose: 'a', chuck: 'b', gauge: 'c' });
+  const column = profile.fields.indexOf('cutOutKpa');
+  const rising = profile.members.map((member) => member[column]!).sort((a, b) => a - b);
+  const { low, middle, high } = learned!.cutOutKpa!;
+  expect(rising).toEqual(expect.arrayContaining([low, middle, high]));
+  expect(rising.filter((kpa) => kpa < low).length).toBeLessThanOrEqual(rising.length / 10);
+  expect(rising.filter((kpa) => kpa > high).length).toBeLessThanOrEqual(rising.length / 10 + 1);
+  expect(learned!.cutInKpa!.middle).toBeLessThan(middle);
 });

@@ -50,6 +50,11 @@ describe('what a coach needs, in words', () => {
       'Tag left is 5 psi over. Tag right was read warm. Check it again cold. The other six hold.',
     ],
     [
+      'one was warm and still low',
+      check({ 'steer-left': 95 }, ['steer-left']),
+      'Steer left was read warm and still low. Fill it and check again cold. The other seven hold.',
+    ],
+    [
       'one is left to read',
       check({ 'tag-right': null }),
       'Tag right has not been read. The other seven hold.',

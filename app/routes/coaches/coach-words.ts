@@ -16,7 +16,8 @@ export function needWords({ tires }: Pick<ColdCheck, 'tires'>, unit: PressureUni
     tooLowWords([...of('too-low'), ...of('mate-too-low')]),
     airWords(of('needs-air'), unit),
     overWords(of('over'), unit),
-    warmWords(of('warm')),
+    warmLowWords(of('warm').filter(isWarmLow)),
+    warmWords(of('warm').filter((tire) => !isWarmLow(tire))),
     notReadWords(of('not-read')),
     restWords(of('in-tolerance').length, tires.length),
   ];
@@ -61,6 +62,14 @@ function overWords(tires: readonly SortedTire[], unit: PressureUnit): string {
     return `${positionName(tire.position)} is ${amount(tire.verdict.byKpa, unit)} over.`;
   }
   return `${names(tires)} ${tires.length === 1 ? 'is' : 'are'} over.`;
+}
+
+const isWarmLow = ({ verdict }: SortedTire) => verdict.kind === 'warm' && verdict.belowTarget;
+
+function warmLowWords(tires: readonly SortedTire[]): string {
+  if (tires.length === 0) return '';
+  const [was, them] = tires.length === 1 ? ['was', 'it'] : ['were', 'them'];
+  return `${names(tires)} ${was} read warm and still low. Fill ${them} and check again cold.`;
 }
 
 function warmWords(tires: readonly SortedTire[]): string {

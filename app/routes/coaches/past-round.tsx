@@ -42,17 +42,21 @@ export function PastRoundSection({ round, unit, now }: PastRoundProps) {
       {rows.length === 0 ? (
         <p>No tire was read.</p>
       ) : (
-        <DataTable columns={columnsIn(unit)} rows={rows} rowKey={({ position }) => position} />
+        <DataTable
+          columns={columnsIn(unit, fills.length > 0)}
+          rows={rows}
+          rowKey={({ position }) => position}
+        />
       )}
     </section>
   );
 }
 
-function columnsIn(unit: PressureUnit): Column<Row>[] {
+function columnsIn(unit: PressureUnit, withFills: boolean): Column<Row>[] {
   const pressure = (kpa: number) => formatPressure(gaugeKpa(kpa), unit, { withUnit: false });
   const off = ({ kpa, targetKpa }: Row) =>
     formatPressureDifference(kpaDifference(kpa - targetKpa), unit, { withUnit: false, sign: true });
-  return [
+  const columns: Column<Row>[] = [
     { key: 'tire', head: 'Tire', cell: ({ position }) => positionName(position), rowHead: true },
     {
       key: 'cold',
@@ -67,13 +71,15 @@ function columnsIn(unit: PressureUnit): Column<Row>[] {
     },
     { key: 'target', head: 'Target', cell: ({ targetKpa }) => pressure(targetKpa), figure: true },
     { key: 'off', head: 'Off by', cell: off, figure: true, className: 'max-sm:hidden' },
-    {
-      key: 'fill',
-      head: 'Fill',
-      cell: ({ fills }) => fills.map((fill) => <FillLink key={fill.id} fill={fill} unit={unit} />),
-    },
   ];
+  return withFills ? [...columns, fillColumn(unit)] : columns;
 }
+
+const fillColumn = (unit: PressureUnit): Column<Row> => ({
+  key: 'fill',
+  head: 'Fill',
+  cell: ({ fills }) => fills.map((fill) => <FillLink key={fill.id} fill={fill} unit={unit} />),
+});
 
 const endWords = { done: 'to', stopped: 'stopped at', 'cannot-reach': 'could not reach, left at' };
 

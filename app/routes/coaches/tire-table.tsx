@@ -71,7 +71,7 @@ function columnsIn(unit: PressureUnit): Column<Row>[] {
       key: 'word',
       head: <span className="only-heard">What it needs</span>,
       cell: VerdictCell,
-      className: 'max-sm:hidden',
+      className: 'max-sm:hidden whitespace-nowrap',
     },
   ];
 }
