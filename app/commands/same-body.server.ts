@@ -1,7 +1,7 @@
 import { type FieldProblem, Refusal } from '~/services/refusal.server';
 
 /** One text for one meaning: the order of an object's keys says nothing. */
-export function canonical(value: unknown): string {
+function canonical(value: unknown): string {
   return JSON.stringify(value, (_key, inside: unknown) =>
     inside && typeof inside === 'object' && !Array.isArray(inside)
       ? Object.fromEntries(Object.entries(inside).sort(([a], [b]) => (a < b ? -1 : 1)))

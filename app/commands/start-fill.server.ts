@@ -15,7 +15,7 @@ import { refuseOtherBody } from './same-body.server';
 import { possibleMoment } from './start-time.server';
 
 /** An attempt that arrives later than this after its start was begun without signal, ms. */
-export const offlineAfterMs = 60_000;
+const offlineAfterMs = 60_000;
 
 /**
  * Starts a fill under an id made on the phone and freezes what the engine starts from. Sent again,

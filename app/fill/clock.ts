@@ -7,7 +7,7 @@ export interface Ticks {
 }
 
 /** When a request left, when its answer came (both monotonic), and the server's time in it. */
-export interface ClockSample {
+interface ClockSample {
   readonly sentAt: number;
   readonly receivedAt: number;
   /** Milliseconds since the epoch. */

@@ -54,11 +54,6 @@ export function endOf(log: RunLog): RunEnd | undefined {
   return end;
 }
 
-/** Ids of the events that were taken back. */
-export function takenBack(log: RunLog): ReadonlySet<string> {
-  return new Set(log.flatMap(({ event }) => (event.type === 'taken-back' ? [event.of] : [])));
-}
-
 const readAs = new WeakMap<RunLog, readonly FillEvent[]>();
 
 /**

@@ -1,7 +1,7 @@
 import type { OutboxItem, Problem } from './outbox-items';
 
 /** An item as it is kept, with the problem when the server has refused it. */
-export interface KeptItem {
+interface KeptItem {
   readonly item: OutboxItem;
   readonly problem?: Problem;
 }

@@ -1,8 +1,8 @@
 /** How long ago something recorded on a phone may have begun, days. */
-export const oldestStartDays = 90;
+const oldestStartDays = 90;
 
 /** How far ahead of the server a phone's clock may be, minutes. */
-export const clockAllowanceMinutes = 5;
+const clockAllowanceMinutes = 5;
 
 /**
  * What is expected of a time at which a round, reading or fill began, or undefined when `startedAt`

@@ -22,7 +22,7 @@ export const appendAnswer = z.object({
 export type AppendAnswer = z.infer<typeof appendAnswer>;
 
 /** One event as the server keeps it. */
-export const storedEvent = z.object({
+const storedEvent = z.object({
   seq,
   side: z.enum(['wheel', 'cab']),
   deviceId: idField,

@@ -13,7 +13,7 @@ import {
 } from './wire-fields';
 
 /** Why a fill ended. */
-export const endings = ['done', 'stopped', 'cannot-reach'] as const;
+const endings = ['done', 'stopped', 'cannot-reach'] as const;
 export type Ending = (typeof endings)[number];
 
 const calls = [
@@ -92,6 +92,6 @@ export const wireFillEvent = z.discriminatedUnion('type', fillEventTypes, {
 export type WireEvent = z.infer<typeof wireFillEvent>;
 
 /** What a run's log may hold, by its kind. */
-export const eventsOfKind = { fill: wireFillEvent } as const;
+const eventsOfKind = { fill: wireFillEvent } as const;
 export type RunKind = keyof typeof eventsOfKind;
 export const runKinds = ['fill'] as const satisfies readonly RunKind[];
