@@ -4,7 +4,8 @@ import { cabCall } from './calls-cab';
 import { callWhileOff } from './calls-off';
 import { callWhileOn } from './calls-on';
 import { callAfterProof, callWhileBleeding } from './calls-proof';
-import type { Advice, FillEvent, FillSetup } from './contract';
+import { checkNow } from './checks';
+import type { Advice, FillEvent, FillSetup, Spread } from './contract';
 import type { Ensemble } from './ensemble';
 import { type Facts, proof, readFacts } from './facts';
 import { readIn } from './reading-need';
@@ -15,6 +16,8 @@ export interface Situation {
   setup: FillSetup;
   facts: Facts;
   belief: Belief;
+  /** The cut-in that was believed when the fill began. */
+  startCutIn: Spread;
   at: number;
 }
 
@@ -27,10 +30,11 @@ export function adviseAt(
   events: readonly FillEvent[],
   setup: FillSetup,
   at: number,
+  startCutIn: Spread,
 ): Advice {
   const facts = readFacts(events, setup);
   const belief = believe(e);
-  const situation: Situation = { e, setup, facts, belief, at };
+  const situation: Situation = { e, setup, facts, belief, startCutIn, at };
   const decision = decide(situation);
   return {
     cab: cabCall(situation, decision),
@@ -46,6 +50,8 @@ export function adviseAt(
 }
 
 function decide(s: Situation): Decision {
+  const check = checkNow(s);
+  if (check) return check;
   if (s.facts.bleeding) return callWhileBleeding(s);
   if (s.facts.chuckOn) return callWhileOn(s);
   const proven = proof(s.facts, s.setup);

@@ -1,9 +1,10 @@
 /** What the ensemble believes at one moment, in the figures that the calls are decided by. */
 import { standardDraw } from './arithmetic';
-import { type Members, SPEED, sourceAbs } from './coach';
+import { createMembers, type Members, SPEED, sourceAbs } from './coach';
 import type { Spread } from './contract';
 import type { Ensemble } from './ensemble';
-import { spreadOf } from './spread';
+import { pickByWeight } from './renewal';
+import { evenSpread } from './spread';
 
 export interface Belief {
   supply: Spread;
@@ -18,12 +19,14 @@ export interface Belief {
   supplyDrift: Spread;
 }
 
-const column = new Float64Array(4096);
+/** Quantiles are taken over this many members, picked evenly by weight. */
+const PICKED = 160;
+const picked = createMembers(PICKED);
+const column = new Float64Array(PICKED);
 
-function spreadBy(e: Ensemble, value: (i: number) => number): Spread {
-  const n = e.members.n;
-  for (let i = 0; i < n; i++) column[i] = value(i);
-  return spreadOf(column, e.weights, n);
+function spreadBy(value: (i: number) => number): Spread {
+  for (let i = 0; i < PICKED; i++) column[i] = value(i);
+  return evenSpread(column);
 }
 
 /** The supply of a member with its doubt drawn: the same standard draw for the same place. */
@@ -38,17 +41,19 @@ export function chance(e: Ensemble, holds: (i: number) => boolean): number {
 }
 
 export function believe(e: Ensemble): Belief {
-  const m = e.members;
+  const all = e.members;
+  pickByWeight(all, e.weights, picked, 0.5);
+  const m = picked;
   const atmosphere = e.controls.atmosphereKpa;
   return {
-    supply: spreadBy(e, (i) => supplyDrawn(m, i) - atmosphere),
-    tire: spreadBy(e, (i) => m.tireAbs[i]! - atmosphere),
-    loaded: chance(e, (i) => m.loaded[i] === 1 && m.speed[i] !== SPEED.off),
-    flowsIn: chance(e, (i) => supplyDrawn(m, i) > m.tireAbs[i]! + m.warmth[i]!),
-    fastIdle: chance(e, (i) => m.speed[i] === SPEED['fast-idle']),
-    cutIn: spreadBy(e, (i) => m.cutInKpa[i]!),
-    cutOut: spreadBy(e, (i) => m.cutOutKpa[i]!),
-    gain: spreadBy(e, (i) => m.flow[i]! / m.tireL[i]!),
-    supplyDrift: spreadBy(e, (i) => m.drift[i]!),
+    supply: spreadBy((i) => supplyDrawn(m, i) - atmosphere),
+    tire: spreadBy((i) => m.tireAbs[i]! - atmosphere),
+    loaded: chance(e, (i) => all.loaded[i] === 1 && all.speed[i] !== SPEED.off),
+    flowsIn: chance(e, (i) => supplyDrawn(all, i) > all.tireAbs[i]! + all.warmth[i]!),
+    fastIdle: chance(e, (i) => all.speed[i] === SPEED['fast-idle']),
+    cutIn: spreadBy((i) => m.cutInKpa[i]!),
+    cutOut: spreadBy((i) => m.cutOutKpa[i]!),
+    gain: spreadBy((i) => m.flow[i]! / m.tireL[i]!),
+    supplyDrift: spreadBy((i) => m.drift[i]!),
   };
 }

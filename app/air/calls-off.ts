@@ -8,13 +8,17 @@ import { evenSpread } from './spread';
 
 /** Lowering is asked for only while the compressor is hardly loaded, and stopped when it is. */
 const LOADED_LITTLE = 0.25;
-const LOADED_LIKELY = 0.55;
+const LOADED_LIKELY = 0.7;
 /** A supply known no better than this is read before anything else is said, kPa (p90 − p10). */
 const UNKNOWN_KPA = 70;
 /** The chuck goes on where air is this likely to flow in when hands have done it. */
-const FLOWS_LIKELY = 0.7;
+const FLOWS_LIKELY = 0.8;
 /** A hold that brings less than this is not worth the hands, kPa. */
 const LEAST_HOLD_KPA = 1.5;
+/** A governor gives a little more now and then; said when this sure, with a cut-out known so well. */
+const REACH_MARGIN_KPA = 5;
+const REACH_SURE = 0.9;
+const KNOWN_CUT_OUT_KPA = 55;
 /** What a shown call is worth over a change of mind, s. */
 const STANDS_S = 6;
 
@@ -66,10 +70,11 @@ function needsGauge(s: Situation): boolean {
 
 function cannotReach(s: Situation): Decision | undefined {
   const { e, belief, setup, facts } = s;
-  if (facts.cutOuts.length === 0 && !setup.profile && !setup.supply) return undefined;
-  const need = setup.tire.targetKpa - setup.tire.toleranceKpa;
+  const known = belief.cutOut.p90 - belief.cutOut.p10 < KNOWN_CUT_OUT_KPA;
+  if (facts.cutOuts.length === 0 && !((setup.profile || setup.supply) && known)) return undefined;
+  const need = setup.tire.targetKpa - setup.tire.toleranceKpa - REACH_MARGIN_KPA;
   const never = chance(e, (i) => e.members.cutOutKpa[i]! < need);
-  if (never < 0.93) return undefined;
+  if (never < REACH_SURE) return undefined;
   return { call: 'cannot-reach', reason: 'governor-too-low', reachKpa: belief.cutOut };
 }
 

@@ -9,7 +9,7 @@ import { evenSpread } from './spread';
 const OVER_ACCEPTED = 0.06;
 const OVER_LIMIT_ACCEPTED = 0.08;
 /** Chance of air going out at which a hold on a falling supply is ended. */
-const OUTFLOW_ACCEPTED = 0.3;
+const OUTFLOW_ACCEPTED = 0.2;
 /** A call to take it off stands for this long once it was shown, s. */
 const STICKS_S = 12;
 
@@ -46,7 +46,7 @@ function keepOrCycle(s: Situation, goal: Goal): Decision {
   const keep = kept.outcome;
   const changeIn = evenSpread(keep.change);
   const saidOff = s.facts.shown === 'chuck-off' && s.at - s.facts.shownAt < STICKS_S;
-  if (saidOff && changeIn.p50 < 6) return { call: 'chuck-off', reason: 'cycle-again' };
+  if (saidOff && changeIn.p50 < 25) return { call: 'chuck-off', reason: 'cycle-again' };
   if (changeIn.p50 <= 1) return { call: 'chuck-off', reason: 'supply-at-tire' };
   if (s.belief.loaded < 0.4) {
     const off = rollOut(sample, 'off-now', kept.goal, atmosphere);

@@ -16,7 +16,7 @@ export function callAfterProof(
   const atStart = s.facts.gauged.length === 0;
   const settledOver = s.belief.tire.p50 - targetKpa;
   if (Math.abs(over) <= toleranceKpa + HAIR_KPA) {
-    if (atStart || settledOver > -toleranceKpa * 1.5) {
+    if (atStart || settledOver > -toleranceKpa * 1.3) {
       return { call: 'done', reason: 'in-tolerance' };
     }
     return undefined;

@@ -22,6 +22,8 @@ export class Ensemble {
   /** When a purge was last tapped, and whether a supply reading has been seen. */
   heardAt = -1e6;
   supplySeen = false;
+  /** A sensor was read: it has no error of its own. */
+  sensorSeen = false;
 
   constructor(
     n: number,
@@ -45,6 +47,7 @@ export class Ensemble {
     this.applied = other.applied;
     this.heardAt = other.heardAt;
     this.supplySeen = other.supplySeen;
+    this.sensorSeen = other.sensorSeen;
   }
 
   clone(): Ensemble {

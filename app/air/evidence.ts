@@ -53,6 +53,7 @@ export function takeSupplyReading(e: Ensemble, reading: Reading, rig: FillSetup[
   const noise = sourceNoise(reading, rig);
   if (!e.supplySeen) placeAll(e, reading, noise);
   e.supplySeen = true;
+  if (reading.source === 'sensor') e.sensorSeen = true;
   let mean = 0;
   for (let i = 0; i < m.n; i++) {
     const distance = distanceTo(e, i, reading);
@@ -118,20 +119,35 @@ function placeAll(e: Ensemble, reading: Reading, noise: number): void {
   }
 }
 
-/** Nobody expected this: half of the members believe it and think anew, half take it for wrong. */
+/** Chance that an unexpected reading means that the governor has switched unnoticed. */
+const SWITCHED_UNSEEN = 0.85;
+
+/** Share of members that take an unexpected reading for wrong and stay as they are. */
+const TAKEN_FOR_WRONG = 0.25;
+
+/** Nobody expected this: most members believe it and think anew, the others take it for wrong. */
 function acceptOrDoubt(e: Ensemble, reading: Reading, noise: number): void {
   const m = e.members;
   for (let i = 0; i < m.n; i++) {
-    if (scratch[i]! > 0.1 || uniform(e.draws) < 0.5) continue;
-    if (uniform(e.draws) < 0.5) {
-      refreshLasting(e, i);
-      if (uniform(e.draws) < 0.4) m.loaded[i] = 1 - m.loaded[i]!;
-    }
+    if (scratch[i]! > 0.1 || uniform(e.draws) < TAKEN_FOR_WRONG) continue;
+    const higher = distanceTo(e, i, reading) > 0;
+    const before = m.supplyAbs[i]! - e.controls.atmosphereKpa;
+    if (uniform(e.draws) < 0.5) refreshLasting(e, i);
+    if (uniform(e.draws) < SWITCHED_UNSEEN) switchUnseen(e, i, higher, before);
     const shown = reading.kpa + noise * normal(e.draws);
     e.shiftSupply(i, shown - predictedReading(e, i, reading.source));
     m.doubt[i] = 0;
     reconcileGovernor(m, i, e.draws, e.controls.atmosphereKpa);
   }
+}
+
+/** It stands higher, so it loaded near where it was last believed; or lower, so it does not pump. */
+function switchUnseen(e: Ensemble, i: number, higher: boolean, before: number): void {
+  const m = e.members;
+  if (higher === (m.loaded[i] === 1)) return;
+  m.loaded[i] = higher ? 1 : 0;
+  m.sinceSwitch[i] = 20;
+  if (higher) m.cutInKpa[i] = before + GOVERNOR_JITTER_KPA * normal(e.draws);
 }
 
 export function takeTireReading(e: Ensemble, reading: TireReading, rig: FillSetup['rig']): void {

@@ -37,11 +37,15 @@ export interface Facts {
   /** The call that the screen last said, and since when. */
   shown: Call | undefined;
   shownAt: number;
+  /** Since when "take it off" has been shown in this hold. */
+  offShownAt: number | undefined;
   /** Seconds from a shown "take it off" to the tap, latest last. */
   reactions: number[];
 }
 
 const NEVER = -1e6;
+/** A tap later than this after the call was forgotten at first, and tells no reaction, s. */
+const LONGEST_REACTION_S = 15;
 
 export function readFacts(events: readonly FillEvent[], setup: FillSetup): Facts {
   const facts: Facts = {
@@ -64,25 +68,21 @@ export function readFacts(events: readonly FillEvent[], setup: FillSetup): Facts
     cutIns: [],
     shown: undefined,
     shownAt: NEVER,
+    offShownAt: undefined,
     reactions: [],
   };
-  let offShownAt = NEVER;
   for (const event of events) {
-    if (event.type === 'call-shown') {
-      facts.shown = event.call;
-      facts.shownAt = event.at;
-      if (event.call === 'chuck-off' && offShownAt === NEVER) offShownAt = event.at;
-      else if (event.call !== 'chuck-off') offShownAt = NEVER;
-      continue;
-    }
-    if (event.type === 'chuck' && !event.on && facts.chuckOn && offShownAt !== NEVER) {
-      const seconds = event.at - offShownAt;
-      if (seconds < 15) facts.reactions.push(seconds);
-      offShownAt = NEVER;
-    }
-    note(facts, event);
+    if (event.type === 'call-shown') noteShown(facts, event);
+    else note(facts, event);
   }
   return facts;
+}
+
+function noteShown(facts: Facts, event: Extract<FillEvent, { type: 'call-shown' }>): void {
+  facts.shown = event.call;
+  facts.shownAt = event.at;
+  if (event.call === 'chuck-off') facts.offShownAt ??= event.at;
+  else if (event.call !== 'check') facts.offShownAt = undefined;
 }
 
 function note(facts: Facts, event: FillEvent): void {
@@ -145,6 +145,9 @@ function noteLowering(facts: Facts, event: Extract<FillEvent, { type: 'lowering'
 function noteChuck(facts: Facts, at: number, on: boolean): void {
   if (on === facts.chuckOn) return;
   facts.chuckOn = on;
+  const shownFor = at - (facts.offShownAt ?? NEVER);
+  if (!on && shownFor < LONGEST_REACTION_S) facts.reactions.push(shownFor);
+  facts.offShownAt = undefined;
   if (on) facts.holds.push({ on: at, off: undefined });
   else facts.holds[facts.holds.length - 1]!.off = at;
 }

@@ -3,6 +3,7 @@
  * and for how long? Pure: no clock, no network, no randomness that is not seeded.
  */
 import { adviseAt } from './advise';
+import { believe } from './belief';
 import type { Fill, FillEvent, FillSetup } from './contract';
 import { createEventLog } from './event-log';
 import { createFilter } from './filter';
@@ -21,7 +22,7 @@ export {
 export { REASONS, type Reason } from './reasons';
 
 /** Changes whenever the same log could give another answer. */
-export const ENGINE_VERSION: string = '1';
+export const ENGINE_VERSION: string = '2';
 
 /**
  * Starts a fill.
@@ -32,6 +33,7 @@ export function createFill(setup: FillSetup): Fill {
   const own: FillSetup = structuredClone(setup);
   const log = createEventLog();
   const filter = createFilter(own, log);
+  const startCutIn = believe(filter.stateAt(0).ensemble).cutIn;
   return {
     apply(event: FillEvent) {
       log.add(event);
@@ -39,7 +41,7 @@ export function createFill(setup: FillSetup): Fill {
     advise(at) {
       checkTime('at', at);
       const { ensemble, events } = filter.stateAt(at);
-      return adviseAt(ensemble, events, own, at);
+      return adviseAt(ensemble, events, own, at, startCutIn);
     },
     profile() {
       return profileOf(filter.stateAt(log.lastAt()).ensemble, own);

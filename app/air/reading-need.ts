@@ -2,11 +2,13 @@
 import type { Decision, Situation } from './advise';
 
 /** Readings closer together than this teach little, s. */
-const LEAST_GAP_S = 10;
+const LEAST_GAP_S = 14;
 /** One comes about once a minute unasked; somewhat later it is asked for, s. */
 const USUAL_GAP_S = 75;
 /** A supply known to within this is known well enough for any call, kPa (p90 − p10). */
 const NARROW_KPA = 14;
+/** After lowering ends, a loaded compressor shows on the gauge within this, s. */
+const LOADING_SHOWS_S = 9;
 /** A call that may change so soon is worth a reading, s. */
 const SOON_S = 8;
 /** After the chuck goes on the gauge settles; its drop tells how fast the air goes, s. */
@@ -20,10 +22,22 @@ export function readIn(s: Situation, decision: Decision): number | undefined {
   const last = s.facts.readings[s.facts.readings.length - 1];
   if (!last) return 0;
   const soon = call === 'wait' && decision.changeIn !== undefined && decision.changeIn.p10 < SOON_S;
+  if (call === 'wait' && afterLowering(s)) {
+    return Math.round((s.facts.loweringEnded + LOADING_SHOWS_S - s.at) * 1000) / 1000;
+  }
   const wide = s.belief.supply.p90 - s.belief.supply.p10 > NARROW_KPA;
   const gap = matters(s) || (soon && wide) ? LEAST_GAP_S : USUAL_GAP_S;
   const regular = last.at + gap - s.at;
   return Math.round(Math.min(regular, dropReading(s, last.at)) * 1000) / 1000;
+}
+
+/** Whether the compressor loaded is not known yet: its rise, or no rise, will show. */
+function afterLowering(s: Situation): boolean {
+  const { facts, belief, at } = s;
+  const last = facts.readings[facts.readings.length - 1];
+  const shown = last !== undefined && last.at > facts.loweringEnded + LOADING_SHOWS_S / 2;
+  const open = belief.loaded > 0.05 && belief.loaded < 0.95;
+  return !shown && open && at - facts.loweringEnded < 60;
 }
 
 /** Whether the supply may be on either side of the tire, as far as is known. */

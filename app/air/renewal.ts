@@ -66,7 +66,6 @@ export function jitterMember(m: Members, i: number, draws: Draws, widths: Widths
   m.pathC[i] = m.pathC[i]! * core;
   m.cutInKpa[i] = m.cutInKpa[i]! + widths.cutIn * normal(draws);
   m.cutOutKpa[i] = m.cutOutKpa[i]! + widths.cutOut * normal(draws);
-  turnBias(m, i, draws);
   const share = m.gaugeShare[i]! + 0.02 * normal(draws);
   m.gaugeShare[i] = Math.min(1, Math.max(0.1, share));
 }
@@ -78,6 +77,7 @@ const BIAS_DRAWN = Math.sqrt(1 - BIAS_KEPT * BIAS_KEPT);
 /**
  * No reading of a gauge tells its error: resampling alone would settle on one by chance. A move
  * along that direction, error against supply and governor, leaves readings and prior as they are.
+ * A sensor has no such error, and ties the supply.
  */
 function turnBias(m: Members, i: number, draws: Draws): void {
   const wheel = BIAS_KEPT * m.wheelBias[i]! + BIAS_DRAWN * WHEEL_BIAS_KPA * normal(draws);
@@ -148,6 +148,7 @@ export function resampleIfThin(e: Ensemble): void {
   const widths = widthsOf(e.members);
   for (let i = 0; i < e.members.n; i++) {
     jitterMember(e.members, i, e.draws, widths);
+    if (!e.sensorSeen) turnBias(e.members, i, e.draws);
     if (uniform(e.draws) < FRESH_SHARE) refreshLasting(e, i);
   }
 }
