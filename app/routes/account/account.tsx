@@ -31,6 +31,7 @@ export async function loader({ context, request }: Route.LoaderArgs) {
     seen: agoWords(device.seenAt, now),
     since: agoWords(device.createdAt, now),
   }));
+  devices.sort((left, right) => Number(right.here) - Number(left.here));
   return { email, name, pressureUnit, devices, done: doneOf(request) };
 }
 

@@ -27,7 +27,7 @@ export default function Logout({ loaderData }: Route.ComponentProps) {
         out ends it in this browser only.
       </p>
       {/* A whole new page, so that nothing of this person stays in the browser's memory. */}
-      <Form method="post" reloadDocument>
+      <Form method="post" className="form" reloadDocument>
         <Button kind="main">Sign out</Button>
       </Form>
     </PageShell>
