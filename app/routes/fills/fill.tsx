@@ -1,5 +1,6 @@
 import { redirect, useRouteLoaderData } from 'react-router';
 import { ENGINE_VERSION } from '~/air';
+import { reloadForEngine } from '~/fill/engine-match';
 import { endOf } from '~/fill/log';
 import { thisPhone } from '~/fill/phone';
 import { putRun } from '~/fill/store';
@@ -27,8 +28,7 @@ export async function clientLoader({ params, serverLoader }: Route.ClientLoaderA
     return { runId: id, after: mayEnd ? `/fills/${id}/review` : `/rounds/${roundId}` };
   }
   const { run, after, engineVersion } = await serverLoader();
-  // This page is older than the server: it would advise by another engine.
-  if (engineVersion !== ENGINE_VERSION) window.location.reload();
+  if (reloadForEngine(engineVersion, window)) await new Promise(() => {});
   putRun(store, run);
   return { runId: run.id, after };
 }
