@@ -1,5 +1,5 @@
 /** From belief and facts to one call. The order of the questions is the order of what matters. */
-import { type Belief, believe } from './belief';
+import { believe } from './belief';
 import { cabCall } from './calls-cab';
 import { callWhileOff } from './calls-off';
 import { callWhileOn } from './calls-on';
@@ -7,23 +7,9 @@ import { callAfterProof, callWhileBleeding } from './calls-proof';
 import { checkNow } from './checks';
 import type { Advice, FillEvent, FillSetup, Spread } from './contract';
 import type { Ensemble } from './ensemble';
-import { type Facts, proof, readFacts } from './facts';
+import { proof, readFacts } from './facts';
 import { readIn } from './reading-need';
-
-/** What every call is decided from. */
-export interface Situation {
-  e: Ensemble;
-  setup: FillSetup;
-  facts: Facts;
-  belief: Belief;
-  /** The cut-in that was believed when the fill began. */
-  startCutIn: Spread;
-  at: number;
-}
-
-/** A call with what belongs to it alone. */
-export type Decision = Pick<Advice, 'call' | 'reason'> &
-  Partial<Pick<Advice, 'by' | 'changeIn' | 'reachKpa' | 'offBy' | 'readIn' | 'cab'>>;
+import type { Decision, Situation } from './situation';
 
 export function adviseAt(
   e: Ensemble,

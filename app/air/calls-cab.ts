@@ -1,6 +1,7 @@
 /** What the helper in the driver's seat should do, or the person alone while there. */
-import type { Decision, Situation } from './advise';
+
 import type { CabCall } from './contract';
+import type { Decision, Situation } from './situation';
 
 /** Fast idle is asked back when it is less likely than this after the pedal. */
 const FAST_IDLE_LIKELY = 0.85;

@@ -1,9 +1,10 @@
 /** The chuck is off and the tire needs air: gauge, wait, bring the supply down, or put it on. */
-import type { Decision, Situation } from './advise';
+
 import { chance } from './belief';
 import { lastTouched } from './facts';
 import { costOf, type Goal, meanOf, rollOut, rollOutBest, sampleFor } from './forecast';
 import { lowestSupply, planGoal } from './plan';
+import type { Decision, Situation } from './situation';
 import { evenSpread } from './spread';
 
 /** Lowering is asked for only while the compressor is hardly loaded, and stopped when it is. */

@@ -1,8 +1,9 @@
 /** The chuck is on: keep it, or take it off. */
-import type { Decision, Situation } from './advise';
+
 import { chance } from './belief';
 import { costOf, type Goal, rollOut, rollOutBest, sampleFor } from './forecast';
 import { planGoal } from './plan';
+import type { Decision, Situation } from './situation';
 import { evenSpread } from './spread';
 
 /** Chance of ending over the tolerance, and over the limit, at which a hold is ended. */

@@ -1,5 +1,5 @@
 /** Gauged: done, over, or more air. */
-import type { Decision, Situation } from './advise';
+import type { Decision, Situation } from './situation';
 
 /** Readings are rounded; a hair over the tolerance is within it. */
 const HAIR_KPA = 0.05;

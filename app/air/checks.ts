@@ -2,12 +2,13 @@
  * Something is not as it should be. Each check rests on what was tapped, stands for a while after
  * its evidence and then gives way, so that a person who has looked is not held up.
  */
-import type { Decision, Situation } from './advise';
+
 import { chance } from './belief';
 import { PATH } from './coach';
 import type { SeenReading } from './facts';
 import { KPA_PER_PSI } from './priors';
 import type { Reason } from './reasons';
+import type { Decision, Situation } from './situation';
 
 /** How long a check stands after its evidence, s. */
 const STANDS_S = 15;

@@ -2,10 +2,29 @@
  * What other parts, and checks of this project, call. Pressures are gauge kPa unless the name says
  * `Abs`; times are seconds since the fill's start; volumes are litres. Everything is plain JSON.
  */
-import type { AirProfile, SupplyState } from './profile';
 import type { Reason } from './reasons';
 
-export type { AirProfile, SupplyState };
+/** Names of what the figures were learned with. */
+export interface RigKey {
+  hose?: string;
+  chuck?: string;
+  gauge?: string;
+}
+
+export interface AirProfile {
+  schema: number;
+  key: RigKey;
+  /** How many fills have taught it. */
+  fills: number;
+  fields: string[];
+  members: number[][];
+}
+
+export interface SupplyState {
+  schema: number;
+  fields: string[];
+  members: number[][];
+}
 
 export type EngineSpeed = 'off' | 'idle' | 'fast-idle';
 export type LowerBy = 'pedal' | 'drain';

@@ -1,8 +1,9 @@
 /** The goal that rollouts are run for: where to stop, how to lower, what hands need. */
-import type { Situation } from './advise';
+
 import type { LowerBy } from './contract';
 import type { Goal, Hands } from './forecast';
 import { KPA_PER_PSI } from './priors';
+import type { Situation } from './situation';
 
 /** Usual hands until this person's are known, s. */
 const PUT_ON_S = 3;

@@ -5,35 +5,13 @@
  */
 import { normal, uniform } from './arithmetic';
 import { createMembers, type Field, LASTING_FIELDS, type Members } from './coach';
-import type { FillSetup } from './contract';
+import type { AirProfile, FillSetup, RigKey, SupplyState } from './contract';
 import { Ensemble } from './ensemble';
 import { drawLasting, drawSupply, drawWheel, reconcileGovernor } from './priors';
 import { jitterMember, LEAST_WIDTHS, pickByWeight, type Widths } from './renewal';
 
 export const PROFILE_SCHEMA = 1;
 const KEPT_MEMBERS = 64;
-
-/** Names of what the figures were learned with. */
-export interface RigKey {
-  hose?: string;
-  chuck?: string;
-  gauge?: string;
-}
-
-export interface AirProfile {
-  schema: number;
-  key: RigKey;
-  /** How many fills have taught it. */
-  fills: number;
-  fields: string[];
-  members: number[][];
-}
-
-export interface SupplyState {
-  schema: number;
-  fields: string[];
-  members: number[][];
-}
 
 const SUPPLY_FIELDS: readonly Field[] = [
   'supplyAbs',

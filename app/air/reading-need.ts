@@ -1,5 +1,5 @@
 /** When the next reading of the supply is wanted: only where it may change a call. */
-import type { Decision, Situation } from './advise';
+import type { Decision, Situation } from './situation';
 
 /** Readings closer together than this teach little, s. */
 const LEAST_GAP_S = 14;
