@@ -9,6 +9,15 @@ const handsS = 1.5;
 /** Unasked, a gauge is read this often, s. */
 const readEveryS = 20;
 
+/** What the live screen shows of itself. */
+interface Seen {
+  call: string;
+  answer: string;
+  task: string;
+  keypad: boolean;
+  question: string;
+}
+
 /** React renders in messages of its own, which the held clock does not hold: two turns let it end. */
 const painted = async () => {
   for (let turn = 0; turn < 2; turn++) {
@@ -59,7 +68,7 @@ export class Driver {
     if (heard.some(({ type }) => type === 'cut-out')) await this.#press('It purged');
   }
 
-  async #look() {
+  async #look(): Promise<Seen> {
     const seen = await this.page.evaluate(() => ({
       call: document.querySelector('main.live')?.getAttribute('data-call') ?? '',
       answer: document.querySelector('.key-row-answer .key')?.textContent ?? '',
@@ -75,7 +84,7 @@ export class Driver {
     return seen;
   }
 
-  async #act(seen: Awaited<ReturnType<Driver['#look']>>): Promise<void> {
+  async #act(seen: Seen): Promise<void> {
     if (seen.question) return this.#press(seen.question);
     if (seen.task === 'Fast idle is set' || /idle/i.test(seen.task)) {
       this.coach.setEngine('fast-idle');

@@ -55,9 +55,9 @@ async function makeCoach(page: Page): Promise<string> {
 async function describeAir(page: Page, coachId: string): Promise<void> {
   await page.goto(`/coaches/${coachId}/air`);
   await alive(page);
-  await page.getByLabel('Hose').fill('Blue hose, 12 m');
-  await page.getByLabel('Chuck', { exact: true }).fill('Clip-on');
-  await page.getByLabel('Gauge', { exact: true }).fill('Tee gauge');
+  await page.getByRole('textbox', { name: 'Hose' }).fill('Blue hose, 12 m');
+  await page.getByRole('textbox', { name: 'Chuck' }).fill('Clip-on');
+  await page.getByRole('textbox', { name: 'Gauge', exact: true }).fill('Tee gauge');
   await page.getByLabel('At the chuck, or on a hose without a valve').check();
   await page.getByRole('radio', { name: 'No', exact: true }).check();
   await page.getByRole('button', { name: 'Keep the rig' }).click();
