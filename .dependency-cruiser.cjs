@@ -27,7 +27,10 @@ module.exports = {
       name: 'phone-knows-no-server',
       severity: 'error',
       from: { path: '^app/(fill|components)/', pathNot: '\\.test\\.tsx?$' },
-      to: { path: '^app/(models|commands|queries|services|routes)/|\\.server\\.tsx?$', dependencyTypesNot: ['type-only'] },
+      to: {
+        path: '^app/(models|commands|queries|services|routes)/|\\.server\\.tsx?$',
+        dependencyTypesNot: ['type-only'],
+      },
     },
     {
       name: 'routes-hold-no-orm',
@@ -47,6 +50,9 @@ module.exports = {
     exclude: { path: '\\+types' },
     tsConfig: { fileName: 'tsconfig.json' },
     tsPreCompilationDeps: true,
-    enhancedResolveOptions: { exportsFields: ['exports'], conditionNames: ['import', 'require', 'node', 'default', 'types'] },
+    enhancedResolveOptions: {
+      exportsFields: ['exports'],
+      conditionNames: ['import', 'require', 'node', 'default', 'types'],
+    },
   },
 };

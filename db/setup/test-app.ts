@@ -8,7 +8,7 @@ import { startMailFake } from './mail-fake';
 import { freePort } from './ports';
 import { seed } from './seed';
 import { testBuild } from './test-build';
-import type { Run } from './test-parts';
+import type { Run } from './test-run';
 
 const DATABASE = 'valveside';
 

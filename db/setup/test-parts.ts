@@ -1,22 +1,9 @@
 import { existsSync, readFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { runTool } from './run';
-import type { Stopping } from './stopping';
 import { startTestApp } from './test-app';
 import { testBuild } from './test-build';
-
-export interface Counts {
-  readonly passed: number;
-  readonly failed: number;
-}
-
-export interface Run {
-  /** This run's own folder. */
-  readonly folder: string;
-  /** Words for the part's tool: paths of tests and flags. */
-  readonly rest: readonly string[];
-  readonly stopping: Stopping;
-}
+import type { Counts, Run } from './test-run';
 
 export type Part = (run: Run) => Promise<Counts>;
 

@@ -19,7 +19,8 @@
 import { SetupError } from './run';
 import { Stopping } from './stopping';
 import { makeTestFolder, removeTestFolder } from './test-folder';
-import { type Counts, type Part, type PartName, parts, type Run } from './test-parts';
+import { type Part, type PartName, parts } from './test-parts';
+import type { Counts, Run } from './test-run';
 
 const stopping = new Stopping();
 
