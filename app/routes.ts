@@ -1,20 +1,7 @@
-import { existsSync } from 'node:fs';
-import {
-  index,
-  prefix,
-  type RouteConfig,
-  type RouteConfigEntry,
-  route,
-} from '@react-router/dev/routes';
-
-// While the house is being built: only routes whose module is there yet.
-const built = (entries: RouteConfigEntry[]): RouteConfigEntry[] =>
-  entries
-    .filter((entry) => existsSync(`app/${entry.file}`))
-    .map((entry) => (entry.children ? { ...entry, children: built(entry.children) } : entry));
+import { index, prefix, type RouteConfig, route } from '@react-router/dev/routes';
 
 /** Every address of the product. `e2e/access.spec.ts` walks this table. */
-export default built([
+export default [
   index('routes/landing/landing.tsx'),
   route('practice', 'routes/practice/practice.tsx'),
   route('help', 'routes/help/help.tsx'),
@@ -55,4 +42,4 @@ export default built([
   route('healthz', 'routes/health/healthz.ts'),
   route('readyz', 'routes/health/readyz.ts'),
   route('*', 'routes/not-found.tsx'),
-]) satisfies RouteConfig;
+] satisfies RouteConfig;
