@@ -3,6 +3,7 @@ import { standardDraw } from './arithmetic';
 import { createMembers, type Members, SPEED, sourceAbs } from './coach';
 import type { Spread } from './contract';
 import type { Ensemble } from './ensemble';
+import type { Facts } from './facts';
 import { pickByWeight } from './renewal';
 import { evenSpread } from './spread';
 
@@ -56,4 +57,9 @@ export function believe(e: Ensemble): Belief {
     gain: spreadBy((i) => m.flow[i]! / m.tireL[i]!),
     supplyDrift: spreadBy((i) => m.drift[i]!),
   };
+}
+
+/** Lowering by the log, unless the ensemble believes that a stop was not tapped. */
+export function isLowering(e: Ensemble, facts: Facts): boolean {
+  return facts.lowering !== undefined && chance(e, (i) => e.members.idleHands[i] === 1) <= 0.75;
 }

@@ -1,6 +1,6 @@
 /** The chuck is off and the tire needs air: gauge, wait, bring the supply down, or put it on. */
 
-import { chance } from './belief';
+import { chance, isLowering } from './belief';
 import { lastTouched } from './facts';
 import { costOf, type Goal, meanOf, rollOut, rollOutBest, sampleFor } from './forecast';
 import { lowestSupply, planGoal } from './plan';
@@ -9,7 +9,7 @@ import { evenSpread } from './spread';
 
 /** Lowering is asked for only while the compressor is hardly loaded, and stopped when it is. */
 const LOADED_LITTLE = 0.25;
-const LOADED_LIKELY = 0.7;
+const LOADED_LIKELY = 0.85;
 /** A supply known no better than this is read before anything else is said, kPa (p90 − p10). */
 const UNKNOWN_KPA = 70;
 /** The chuck goes on where air is this likely to flow in when hands have done it. */
@@ -26,7 +26,7 @@ const STANDS_S = 6;
 export function callWhileOff(s: Situation): Decision {
   const { facts, belief, setup } = s;
   const gauge = needsGauge(s);
-  if (isLowering(s))
+  if (isLowering(s.e, facts))
     return gauge && facts.helper ? gaugeMeanwhile(whileLowering(s)) : whileLowering(s);
   if (gauge) return gaugeFirst(s);
   const reach = cannotReach(s);
@@ -77,12 +77,6 @@ function cannotReach(s: Situation): Decision | undefined {
   const never = chance(e, (i) => e.members.cutOutKpa[i]! < need);
   if (never < REACH_SURE) return undefined;
   return { call: 'cannot-reach', reason: 'governor-too-low', reachKpa: belief.cutOut };
-}
-
-/** By the log, unless the ensemble believes that a stop was not tapped. */
-function isLowering(s: Situation): boolean {
-  if (!s.facts.lowering) return false;
-  return chance(s.e, (i) => s.e.members.idleHands[i] === 1) <= 0.75;
 }
 
 function whileLowering(s: Situation): Decision {

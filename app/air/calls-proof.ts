@@ -4,7 +4,7 @@ import type { Decision, Situation } from './situation';
 /** Readings are rounded; a hair over the tolerance is within it. */
 const HAIR_KPA = 0.05;
 /** Most time that is spent on letting a warm tire settle, s. */
-const SETTLE_S = 45;
+const SETTLE_S = 20;
 
 /** @returns undefined where the tire needs air */
 export function callAfterProof(
@@ -23,7 +23,7 @@ export function callAfterProof(
   }
   if (over < 0) return undefined;
   if (warm) return { call: 'done', reason: 'warm-over-target' };
-  if (settledOver > toleranceKpa || atStart) return { call: 'bleed', reason: 'over-target' };
+  if (settledOver > 0.8 * toleranceKpa || atStart) return { call: 'bleed', reason: 'over-target' };
   const waited = s.at - proven.at;
   if (waited < SETTLE_S)
     return { call: 'wait', reason: 'let-it-settle', changeIn: fixed(SETTLE_S - waited) };

@@ -3,7 +3,7 @@
  * its evidence and then gives way, so that a person who has looked is not held up.
  */
 
-import { chance } from './belief';
+import { chance, isLowering } from './belief';
 import { PATH } from './coach';
 import type { SeenReading } from './facts';
 import { KPA_PER_PSI } from './priors';
@@ -26,6 +26,9 @@ const LEAST_BUILD = 0.25;
 /** Lowering by pedal or drain shows on the gauge within this, s, unless the supply is elsewhere. */
 const LOWERING_SHOWS_S = 12;
 
+/** By then hands have long stopped, tapped or not, s. */
+const LOWERING_LONGEST_S = 45;
+
 export function checkNow(s: Situation): Decision | undefined {
   const reason = s.facts.chuckOn ? checkWhileOn(s) : checkWhileOff(s);
   return reason && { call: 'check', reason };
@@ -46,7 +49,7 @@ function checkWhileOn(s: Situation): Reason | undefined {
 
 function checkWhileOff(s: Situation): Reason | undefined {
   const { facts } = s;
-  if (facts.lowering) return lowersNothing(s) ? 'supply-not-moving' : undefined;
+  if (isLowering(s.e, facts)) return lowersNothing(s) ? 'supply-not-moving' : undefined;
   if (facts.lowAir) return 'low-air';
   if (heldInVain(s)) return 'tire-not-rising';
   if (disagree(s)) return 'gauges-disagree';
@@ -86,7 +89,12 @@ function lowersNothing(s: Situation): boolean {
   const last = facts.readings[facts.readings.length - 1];
   const first = before[before.length - 1];
   if (!last || !first || first.source !== last.source || first.flowing) return false;
-  if (last.at - since < LOWERING_SHOWS_S || at - last.at > STANDS_S) return false;
+  if (
+    last.at - since < LOWERING_SHOWS_S ||
+    last.at - since > LOWERING_LONGEST_S ||
+    at - last.at > STANDS_S
+  )
+    return false;
   return last.kpa > first.kpa - 0.6 * KPA_PER_PSI;
 }
 

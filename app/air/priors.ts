@@ -58,8 +58,8 @@ export function drawWheel(
   const core = m.chuckC[i]! * lognormal(draws, slowValve ? 0.7 : 1, 0.24);
   m.pathC[i] = seriesC(m.hoseC[i]!, core);
   m.tireL[i] = volumeL * lognormal(draws, 1, 0.07);
-  m.heating[i] = uniformBetween(draws, 0.02, 0.22);
-  m.coolingS[i] = uniformBetween(draws, 35, 100);
+  m.heating[i] = uniformBetween(draws, 0.02, 0.16);
+  m.coolingS[i] = uniformBetween(draws, 20, 80);
   m.bleedC[i] = lognormal(draws, 0.16, 0.5);
   m.path[i] = PATH.off;
   m.flow[i] = 0;

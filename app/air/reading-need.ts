@@ -7,6 +7,8 @@ const LEAST_GAP_S = 14;
 const USUAL_GAP_S = 75;
 /** A supply known to within this is known well enough for any call, kPa (p90 − p10). */
 const NARROW_KPA = 14;
+/** With the chuck on the gain follows the supply: known no better than this it is read, kPa. */
+const BLIND_KPA = 60;
 /** After lowering ends, a loaded compressor shows on the gauge within this, s. */
 const LOADING_SHOWS_S = 9;
 /** A call that may change so soon is worth a reading, s. */
@@ -44,6 +46,7 @@ function afterLowering(s: Situation): boolean {
 function matters(s: Situation): boolean {
   const { supply, tire, flowsIn } = s.belief;
   if (supply.p90 - supply.p10 < NARROW_KPA) return false;
+  if (s.facts.chuckOn && supply.p90 - supply.p10 > BLIND_KPA) return true;
   if (s.facts.lowering) return supply.p90 - supply.p10 > 2 * NARROW_KPA;
   const near = supply.p10 < tire.p50 + NARROW_KPA && supply.p90 > tire.p50 - NARROW_KPA;
   return near && flowsIn > 0.08 && (flowsIn < 0.92 || s.facts.chuckOn);
