@@ -12,6 +12,8 @@ const LOADED_LITTLE = 0.25;
 const LOADED_LIKELY = 0.85;
 /** A supply known no better than this is read before anything else is said, kPa (p90 − p10). */
 const UNKNOWN_KPA = 70;
+/** What the fill before knew of the supply may be too old for a first call, kPa (p90 − p10). */
+const STALE_KPA = 60;
 /** The chuck goes on where air is this likely to flow in when hands have done it. */
 const FLOWS_LIKELY = 0.8;
 /** A hold that brings less than this is not worth the hands, kPa. */
@@ -19,7 +21,10 @@ const LEAST_HOLD_KPA = 1.5;
 /** A governor gives a little more now and then; said when this sure, with a cut-out known so well. */
 const REACH_MARGIN_KPA = 5;
 const REACH_SURE = 0.9;
-const KNOWN_CUT_OUT_KPA = 55;
+const REACH_SURE_UNHEARD = 0.97;
+const KNOWN_CUT_OUT_KPA = 40;
+/** A gauge that has shown this much more than is needed, kPa: its error is seldom larger. */
+const DENIES_KPA = 14;
 /** What a shown call is worth over a change of mind, s. */
 const STANDS_S = 6;
 
@@ -31,12 +36,13 @@ export function callWhileOff(s: Situation): Decision {
   if (gauge) return gaugeFirst(s);
   const reach = cannotReach(s);
   if (reach) return reach;
-  if (facts.readings.length === 0 && !setup.supply) {
+  const spread = belief.supply.p90 - belief.supply.p10;
+  if (facts.readings.length === 0 && (!setup.supply || spread > STALE_KPA)) {
     return { call: 'read-supply', reason: 'supply-unknown' };
   }
   if (facts.speed === 'off' && belief.flowsIn < 0.5) return { call: 'wait', reason: 'engine-off' };
   const unsure = belief.flowsIn < 0.95 && belief.flowsIn > 0.05;
-  if (unsure && belief.supply.p90 - belief.supply.p10 > UNKNOWN_KPA) {
+  if (unsure && spread > UNKNOWN_KPA) {
     return { call: 'read-supply', reason: 'supply-unsure' };
   }
   return choosePlan(s, planGoal(s));
@@ -69,13 +75,16 @@ function needsGauge(s: Situation): boolean {
   return belief.tire.p90 - belief.tire.p10 > toleranceKpa;
 }
 
+/** Said when a cut-out was heard, or the fill before knew the governor, and no reading denies it. */
 function cannotReach(s: Situation): Decision | undefined {
   const { e, belief, setup, facts } = s;
+  const heard = facts.cutOuts.length > 0;
   const known = belief.cutOut.p90 - belief.cutOut.p10 < KNOWN_CUT_OUT_KPA;
-  if (facts.cutOuts.length === 0 && !((setup.profile || setup.supply) && known)) return undefined;
+  if (!heard && !(setup.supply && known)) return undefined;
   const need = setup.tire.targetKpa - setup.tire.toleranceKpa - REACH_MARGIN_KPA;
+  if (facts.readings.some((r) => r.kpa > need + DENIES_KPA)) return undefined;
   const never = chance(e, (i) => e.members.cutOutKpa[i]! < need);
-  if (never < REACH_SURE) return undefined;
+  if (never < (heard ? REACH_SURE : REACH_SURE_UNHEARD)) return undefined;
   return { call: 'cannot-reach', reason: 'governor-too-low', reachKpa: belief.cutOut };
 }
 

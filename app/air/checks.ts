@@ -44,7 +44,7 @@ function checkWhileOn(s: Situation): Reason | undefined {
     e,
     (i) => e.members.path[i] === PATH.shut || e.members.path[i] === PATH.leaking,
   );
-  return since > 5 && shut > 0.6 ? 'tire-not-rising' : undefined;
+  return since > 5 && shut > 0.8 ? 'tire-not-rising' : undefined;
 }
 
 function checkWhileOff(s: Situation): Reason | undefined {
@@ -62,7 +62,7 @@ function heldInVain(s: Situation): boolean {
   const after = facts.gauged[facts.gauged.length - 1];
   const hold = facts.holds[facts.holds.length - 1];
   if (!after || !hold?.off || after.at < hold.off || at - after.at > STANDS_S) return false;
-  if (hold.off - hold.on < 15) return false;
+  if (hold.off - hold.on < 15 || facts.bledAt > hold.on) return false;
   const before = facts.gauged[facts.gauged.length - 2]?.kpa ?? setup.tire.startKpa;
   const seen = facts.readings.filter((r) => r.at > hold.on - 30 && r.at < after.at);
   const above = seen.length > 0 && seen.every((r) => r.kpa > after.kpa + 5 * KPA_PER_PSI);

@@ -58,7 +58,8 @@ export function takeSupplyReading(e: Ensemble, reading: Reading, rig: FillSetup[
   for (let i = 0; i < m.n; i++) {
     const distance = distanceTo(e, i, reading);
     const lateness = m.drift[i]! * READ_LAG_SPREAD_S;
-    const spread = Math.sqrt(noise * noise + lateness * lateness + m.doubt[i]!);
+    const drop = flowError(e, i, reading);
+    const spread = Math.sqrt(noise * noise + lateness * lateness + drop * drop + m.doubt[i]!);
     let match = (bell(distance, spread) * noise) / spread;
     if (readsTire(e, i, reading, rig)) {
       const tire = m.tireAbs[i]! + m.warmth[i]! - e.controls.atmosphereKpa;
@@ -73,6 +74,13 @@ export function takeSupplyReading(e: Ensemble, reading: Reading, rig: FillSetup[
   }
   correct(e, reading, noise);
   weigh(e, WRONG_SHARE * noise * 0.01);
+}
+
+/** With air moving, the gauge's place in the hose is known only roughly, kPa. */
+function flowError(e: Ensemble, i: number, reading: Reading): number {
+  const m = e.members;
+  if (reading.source !== 'wheel-gauge' || m.path[i] === PATH.off) return 0;
+  return 2 + 0.15 * Math.abs(e.sourceOf(i) - hoseGaugeAbs(m, i));
 }
 
 function distanceTo(e: Ensemble, i: number, reading: Reading): number {

@@ -6,7 +6,7 @@ import { goldenAdvice } from './golden';
  * When this fails and the change is meant: raise ENGINE_VERSION in index.ts, since the same log
  * now gives another answer, and put the printed hash here.
  */
-const GOLDEN_SHA256 = 'f61c3860837b6452b2c4d28ebdc328d349f22c225637c0493bfb3ba4cb7011ee';
+const GOLDEN_SHA256 = '9621ef9aa9657437fff416b63ea35517fc19627bbc21174e70d7eec43eb9bccd';
 
 it('the golden log gives the committed advice, byte for byte', () => {
   const hash = createHash('sha256').update(goldenAdvice()).digest('hex');

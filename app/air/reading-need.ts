@@ -9,6 +9,7 @@ const USUAL_GAP_S = 75;
 const NARROW_KPA = 14;
 /** With the chuck on the gain follows the supply: known no better than this it is read, kPa. */
 const BLIND_KPA = 60;
+const UNSEEN_GAP_S = 22;
 /** After lowering ends, a loaded compressor shows on the gauge within this, s. */
 const LOADING_SHOWS_S = 9;
 /** A call that may change so soon is worth a reading, s. */
@@ -28,7 +29,8 @@ export function readIn(s: Situation, decision: Decision): number | undefined {
     return Math.round((s.facts.loweringEnded + LOADING_SHOWS_S - s.at) * 1000) / 1000;
   }
   const wide = s.belief.supply.p90 - s.belief.supply.p10 > NARROW_KPA;
-  const gap = matters(s) || (soon && wide) ? LEAST_GAP_S : USUAL_GAP_S;
+  const unseen = s.facts.chuckOn && (mayLoadUnseen(s) || isBlind(s));
+  const gap = unseen ? UNSEEN_GAP_S : matters(s) || (soon && wide) ? LEAST_GAP_S : USUAL_GAP_S;
   const regular = last.at + gap - s.at;
   return Math.round(Math.min(regular, dropReading(s, last.at)) * 1000) / 1000;
 }
@@ -42,11 +44,19 @@ function afterLowering(s: Situation): boolean {
   return !shown && open && at - facts.loweringEnded < 60;
 }
 
+/** Unloaded and near cut-in: whether it loads decides how much goes in. */
+function mayLoadUnseen({ belief }: Situation): boolean {
+  return belief.loaded < 0.9 && belief.supply.p10 < belief.cutIn.p90;
+}
+
+function isBlind({ belief }: Situation): boolean {
+  return belief.supply.p90 - belief.supply.p10 > BLIND_KPA;
+}
+
 /** Whether the supply may be on either side of the tire, as far as is known. */
 function matters(s: Situation): boolean {
   const { supply, tire, flowsIn } = s.belief;
   if (supply.p90 - supply.p10 < NARROW_KPA) return false;
-  if (s.facts.chuckOn && supply.p90 - supply.p10 > BLIND_KPA) return true;
   if (s.facts.lowering) return supply.p90 - supply.p10 > 2 * NARROW_KPA;
   const near = supply.p10 < tire.p50 + NARROW_KPA && supply.p90 > tire.p50 - NARROW_KPA;
   return near && flowsIn > 0.08 && (flowsIn < 0.92 || s.facts.chuckOn);
