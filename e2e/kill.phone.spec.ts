@@ -94,7 +94,5 @@ test('a server killed in the middle of a fill loses nothing acknowledged and rep
     });
   } finally {
     await app.stop();
-    const { sequelize } = await import('~/models/database.server');
-    await sequelize.close();
   }
 });
