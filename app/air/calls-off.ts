@@ -88,12 +88,20 @@ function cannotReach(s: Situation): Decision | undefined {
   return { call: 'cannot-reach', reason: 'governor-too-low', reachKpa: belief.cutOut };
 }
 
+/** The longer it takes, the less sure one must be: a compressor that cycles under the pedal. */
+function loadedEnough({ facts, at }: Situation): number {
+  const told = facts.cutIns.some((cutIn) => cutIn > facts.loweringSince);
+  const seconds = at - facts.loweringSince;
+  if (told || seconds > 45) return 0.3;
+  return seconds > 22 ? 0.5 : LOADED_LIKELY;
+}
+
 function whileLowering(s: Situation): Decision {
   const { facts, belief, e } = s;
   const by = facts.lowering;
   const stop = (reason: Decision['reason']): Decision => ({ call: 'stop-lowering', reason, by });
   if (facts.lowAir) return stop('supply-too-low');
-  if (belief.loaded >= LOADED_LIKELY) return stop('cut-in-likely');
+  if (belief.loaded >= loadedEnough(s)) return stop('cut-in-likely');
   if (belief.supply.p50 <= lowestSupply(s)) return stop('low-enough');
   const ahead = rollOut(sampleFor(e), 'go-on-lowering', planGoal(s), e.controls.atmosphereKpa);
   return {
