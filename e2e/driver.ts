@@ -100,12 +100,12 @@ export class Driver {
     switch (call) {
       case 'chuck-on':
       case 'chuck-off':
-        this.coach.setChuck(call === 'chuck-on');
-        return this.#press(answer);
+        await this.#press(answer);
+        return this.coach.setChuck(call === 'chuck-on');
       case 'lower-supply':
       case 'stop-lowering':
-        this.coach.setLowering('drain', call === 'lower-supply');
-        return this.#press(answer);
+        await this.#press(answer);
+        return this.coach.setLowering('drain', call === 'lower-supply');
       case 'gauge-tire':
         return keypad ? this.#type(this.coach.tireKpa(), 2) : undefined;
       case 'bleed':

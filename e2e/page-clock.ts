@@ -8,7 +8,9 @@ const headStartMs = 45 * 60_000;
  * time in an answer is replaced by the page's own, as if both had waited.
  */
 export async function holdClock(page: Page): Promise<void> {
-  await page.clock.install({ time: Date.now() - headStartMs });
+  const start = Date.now() - headStartMs;
+  await page.clock.install({ time: start });
+  await page.clock.pauseAt(start + 1000);
   await page.route('**/api/v1/**', async (route) => {
     const now = await page.evaluate(() => Date.now());
     const answer = await route.fetch();

@@ -34,7 +34,8 @@ export function DataTable<Row>({ caption, columns, rows, rowKey }: DataTableProp
   const turn = (key: string) =>
     setOrder((now) => ({ key, down: now?.key === key ? !now.down : false }));
   return (
-    <div className="table-wrap">
+    // Wider than a phone, it scrolls; a keyboard has to reach it for that.
+    <section className="table-wrap" aria-label="Table" tabIndex={0}>
       <table className="data-table">
         {caption && <caption>{caption}</caption>}
         <thead>
@@ -54,7 +55,7 @@ export function DataTable<Row>({ caption, columns, rows, rowKey }: DataTableProp
           ))}
         </tbody>
       </table>
-    </div>
+    </section>
   );
 }
 
