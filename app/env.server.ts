@@ -102,6 +102,16 @@ export function publicUrl(): URL {
   return env.PUBLIC_URL;
 }
 
+/** How much the log says. Silent without an environment, as in a unit test. */
+export function logLevel(): Env['LOG_LEVEL'] {
+  try {
+    return env.LOG_LEVEL;
+  } catch (error) {
+    if (error instanceof EnvError) return 'silent';
+    throw error;
+  }
+}
+
 /** True under Vite's dev server only. */
 export function isDevelopment(): boolean {
   return env.NODE_ENV === 'development';
