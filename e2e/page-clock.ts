@@ -13,7 +13,8 @@ export async function holdClock(page: Page): Promise<void> {
   await page.clock.pauseAt(start + 1000);
   await page.route('**/api/v1/**', async (route) => {
     const now = await page.evaluate(() => Date.now());
-    const answer = await route.fetch();
+    // The server may close an idle connection at the very moment that it is used again.
+    const answer = await route.fetch({ maxRetries: 3 });
     await route.fulfill({
       response: answer,
       headers: { ...answer.headers(), 'x-server-time': String(now) },
