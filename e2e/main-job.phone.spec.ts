@@ -2,7 +2,7 @@ import { randomUUID } from 'node:crypto';
 import { expect, type Page, test } from '@playwright/test';
 import { kpaPerPsi } from '../app/units';
 import { Driver } from './driver';
-import { holdClock } from './page-clock';
+import { holdClock, stopClock } from './page-clock';
 import { codeFor, query } from './setup/server';
 
 /** Pressures of the cold check, psi, in the order of the walk. */
@@ -101,7 +101,10 @@ async function fillSteerLeft(page: Page): Promise<string> {
     engine: 'idle',
     supplyKpa: 108 * kpaPerPsi,
   });
+  await expect(page.locator('main.live[data-call]')).toBeVisible();
+  await stopClock(page);
   await driver.follow('done', 20 * 60);
+  await page.clock.resume();
   expect(driver.calls).toEqual(
     expect.arrayContaining(['read-supply', 'chuck-on', 'chuck-off', 'done']),
   );
@@ -119,7 +122,6 @@ async function reloadKeepsTheAdvice(page: Page): Promise<void> {
   await expect(panel.getByRole('heading')).toHaveText('Done');
   await expect(page.getByText(/not yet sent/i)).toHaveCount(0);
   await page.reload();
-  await page.clock.runFor(2000);
   await expect(panel.getByRole('heading')).toHaveText('Done');
 }
 

@@ -8,9 +8,7 @@ const headStartMs = 45 * 60_000;
  * time in an answer is replaced by the page's own, as if both had waited.
  */
 export async function holdClock(page: Page): Promise<void> {
-  const start = Date.now() - headStartMs;
-  await page.clock.install({ time: start });
-  await page.clock.pauseAt(start + 1000);
+  await page.clock.install({ time: Date.now() - headStartMs });
   await page.route('**/api/v1/**', async (route) => {
     const now = await page.evaluate(() => Date.now());
     // The server may close an idle connection at the very moment that it is used again.
@@ -20,4 +18,10 @@ export async function holdClock(page: Page): Promise<void> {
       headers: { ...answer.headers(), 'x-server-time': String(now) },
     });
   });
+}
+
+/** From now on the page's clock stands still, and goes on only when the test says so. */
+export async function stopClock(page: Page): Promise<void> {
+  const now = await page.evaluate(() => Date.now());
+  await page.clock.pauseAt(now + 1000);
 }
