@@ -23,6 +23,8 @@ export interface DemoCoach {
   outcome: 'follows-supply' | 'accessory-tank';
   loss: MonthlyLoss;
   usualLoss: number;
+  /** Found low in the last round and left for the owner to fill. */
+  left: WheelPosition;
   air: { cutInPsi: number; cutOutPsi: number; fitting: 'service' | 'supply' | 'accessory' };
   seed: number;
   /** Days between rounds. */
@@ -43,6 +45,7 @@ export const demoCoaches: readonly DemoCoach[] = [
     outcome: 'follows-supply',
     loss: { 'steer-right': 4.2, 'drive-left-inner': 2.4 },
     usualLoss: 1.1,
+    left: 'steer-right',
     air: { cutInPsi: 98, cutOutPsi: 122, fitting: 'supply' },
     seed: 4107,
     everyDays: 16,
@@ -60,6 +63,7 @@ export const demoCoaches: readonly DemoCoach[] = [
     outcome: 'follows-supply',
     loss: { 'steer-left': 3.1 },
     usualLoss: 1.3,
+    left: 'steer-left',
     air: { cutInPsi: 94, cutOutPsi: 118, fitting: 'service' },
     seed: 9231,
     everyDays: 21,

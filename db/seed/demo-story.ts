@@ -25,6 +25,8 @@ export interface StoryRound {
 }
 
 const day = 86_400_000;
+/** No round of the story is younger than two days. */
+const storyDays = demoDays - 2;
 const daysAMonth = 30.4;
 
 /** The temperature at which the story keeps what each tire holds. */
@@ -54,21 +56,23 @@ export async function* tellStory(
   const noise = storyNoise(coach.seed);
   const held = firstPressures(coach, noise);
   const start = now.getTime() - demoDays * day;
-  for (let passed = 0; passed < demoDays - 2; passed += coach.everyDays) {
+  for (let passed = 0; passed < storyDays; passed += coach.everyDays) {
     const round = readRound(coach, start + passed * day, passed, held, noise);
     yield round;
     for (const reading of round.readings) {
       let kpa = reading.kpa;
-      if (needsAir(coach, reading)) kpa = await fill(round, reading.position, kpa);
+      const last = passed + coach.everyDays >= storyDays;
+      const left = last && reading.position === coach.left;
+      if (needsAir(reading) && !left) kpa = await fill(round, reading.position, kpa);
       held.set(reading.position, keep(kpa, round));
     }
     lose(coach, held);
   }
 }
 
-const fillBelowPsi = 2;
-const needsAir = (_: DemoCoach, reading: StoryRound['readings'][number]) =>
-  reading.targetKpa - reading.kpa > fillBelowPsi * kpaPerPsi;
+/** As the cold check sorts: what is two psi low, to the reading's own rounding, still holds. */
+const needsAir = ({ targetKpa, kpa }: StoryRound['readings'][number]) =>
+  targetKpa - kpa > 2.01 * kpaPerPsi;
 
 function firstPressures(coach: DemoCoach, noise: () => number): Map<WheelPosition, GaugeKpa> {
   return new Map(

@@ -29,7 +29,8 @@ export function PageShell({ nav, narrow = false, children }: PageShellProps) {
       <header className="page-head">
         <Link className="mark" to="/">
           <Mark />
-          Valveside
+          {/* Signed in, a phone has no room for the name beside four ways on. */}
+          <span className={viewer ? 'max-sm:sr-only' : undefined}>Valveside</span>
         </Link>
         <nav className="page-nav" aria-label="Main">
           {viewer && <NavLink to="/coaches">Coaches</NavLink>}

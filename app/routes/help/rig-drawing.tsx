@@ -51,10 +51,10 @@ export function RigDrawing() {
           <text x="292" y="190" textAnchor="middle">
             ball valve
           </text>
-          <text x="444" y="172">
+          <text x="444" y="150">
             1.5 m of hose,
           </text>
-          <text x="444" y="194">
+          <text x="444" y="172">
             200 psi or more
           </text>
           <text x="522" y="312" textAnchor="end">
