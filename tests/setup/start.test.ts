@@ -44,7 +44,7 @@ class Start {
   }
 
   async said(words: string): Promise<void> {
-    const until = Date.now() + 90_000;
+    const until = Date.now() + 150_000;
     while (!this.output.includes(words)) {
       if (Date.now() > until || this.child.exitCode !== null) throw new Error(this.output);
       await wait(50);
@@ -104,7 +104,7 @@ test('the built server, run without its settings, ends with their names', async 
 });
 
 test('it starts, refuses a second start, survives a kill, starts again and stops all at Ctrl-C', {
-  timeout: 240_000,
+  timeout: 400_000,
 }, async () => {
   const first = new Start();
   await first.said('Valveside is ready');
