@@ -102,14 +102,13 @@ export function publicUrl(): URL {
   return env.PUBLIC_URL;
 }
 
-/** How much the log says. Silent without an environment, as in a unit test. */
+/**
+ * How much the log says. Read alone and not kept: the log is made when a module is loaded, and the
+ * other settings may not be there yet. A wrong level is told by the full reading at the start.
+ */
 export function logLevel(): Env['LOG_LEVEL'] {
-  try {
-    return env.LOG_LEVEL;
-  } catch (error) {
-    if (error instanceof EnvError) return 'silent';
-    throw error;
-  }
+  const told = schema.shape.LOG_LEVEL.safeParse(process.env.LOG_LEVEL || undefined);
+  return told.success ? told.data : 'info';
 }
 
 /** True under Vite's dev server only. */
