@@ -101,6 +101,14 @@ export function flowShare(ratio: number): number {
 }
 
 /**
+ * A step to an event can be a millisecond long. Tanks that even out in it would make a rate that no
+ * air has, so such a step keeps the rate of the one before. A wide-open drain makes about 100 kPa/s
+ * on the smallest tank of the prior.
+ */
+const LEAST_FOR_DRIFT_S = 0.05;
+const MOST_DRIFT_KPA_S = 100;
+
+/**
  * Advances members `from` to `to` (exclusive) by h seconds.
  * Air passes check valves within the step; a flow never passes the point of equal pressure.
  * One long function with locals, since it is the hot loop of everything.
@@ -158,7 +166,10 @@ export function step(m: Members, from: number, to: number, h: number, controls: 
     m.warmth[i] =
       (m.warmth[i]! * cooling) / (cooling + h) + (m.heating[i]! * m.flow[i]! * h) / m.tireL[i]!;
     if (bleeding) bleed(m, i, h, atmosphere);
-    m.drift[i] = (sourceAbs(m, i) - before) / h;
+    if (h >= LEAST_FOR_DRIFT_S) {
+      const drift = (sourceAbs(m, i) - before) / h;
+      m.drift[i] = Math.max(-MOST_DRIFT_KPA_S, Math.min(MOST_DRIFT_KPA_S, drift));
+    }
     govern(m, i, h, atmosphere);
   }
 }

@@ -3,4 +3,4 @@
  * change is meant: raise ENGINE_VERSION in index.ts, since the same log now gives another answer,
  * and put the printed hash here.
  */
-export const GOLDEN_SHA256 = '9621ef9aa9657437fff416b63ea35517fc19627bbc21174e70d7eec43eb9bccd';
+export const GOLDEN_SHA256 = 'bccce2e7f184a1cbf9bf999e472e651737f74120d14bc3459a8db894ec2ac345';

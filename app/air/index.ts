@@ -22,7 +22,7 @@ export {
 export { REASONS, type Reason } from './reasons';
 
 /** Changes whenever the same log could give another answer. */
-export const ENGINE_VERSION: string = '4';
+export const ENGINE_VERSION: string = '5';
 
 /**
  * Starts a fill.

@@ -124,16 +124,20 @@ class Person {
   }
 
   #helpFromTheSeat(advice: Advice): void {
-    const by = advice.by ?? this.setup.lowerBy?.[0];
     if (advice.cab === 'set-fast-idle' || advice.cab === 'start-engine') {
       const speed = advice.cab === 'start-engine' ? 'idle' : 'fast-idle';
       this.coach.setEngine(speed);
       this.#tap({ type: 'engine', speed });
     }
-    if (!by || (advice.call !== 'lower-supply' && advice.call !== 'stop-lowering')) return;
-    const on = advice.call === 'lower-supply';
+    this.#lower(advice);
+  }
+
+  /** Lowers while the call is to lower, and at no other time. */
+  #lower(advice: Advice): void {
     const last = this.events.findLast((event) => event.type === 'lowering');
-    if ((last?.on ?? false) === on) return;
+    const on = advice.call === 'lower-supply';
+    const by = last?.on ? last.by : (advice.by ?? this.setup.lowerBy?.[0]);
+    if (!by || (last?.on ?? false) === on) return;
     this.coach.setLowering(by, on);
     this.#tap({ type: 'lowering', by, on });
   }
