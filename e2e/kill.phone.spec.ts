@@ -52,8 +52,9 @@ test('a server killed in the middle of a fill loses nothing acknowledged and rep
     const log = () => phone.store.getState().runs[runId]?.log ?? [];
     const acknowledged = () => log().filter(({ seq }) => seq !== null);
     const tapped: string[] = [];
-    const burst = async (count: number) => {
-      for (let place = 0; place < count; place++) {
+    /** Taps until the server is gone, and on for a while. */
+    const burst = async (isGone: () => boolean) => {
+      for (let after = 0; after < 30; after += isGone() ? 1 : 0) {
         tapped.push(
           tap(runId, { type: 'supply-reading', source: 'wheel-gauge', kpa: 700 }, undefined, phone),
         );
@@ -62,9 +63,11 @@ test('a server killed in the middle of a fill loses nothing acknowledged and rep
     };
     for (let kill = 0; kill < 4; kill++) {
       const before = acknowledged().length;
-      const tapping = burst(120);
+      let gone = false;
+      const tapping = burst(() => gone);
       await expect.poll(() => acknowledged().length).toBeGreaterThan(before);
       await app.kill();
+      gone = true;
       const known = acknowledged().map(({ event, seq }) => ({ id: event.id, seq }));
       const stored = await rowsOf(runId);
       for (const one of known) expect(stored).toContainEqual(one);

@@ -8,9 +8,11 @@ const headStartMs = 45 * 60_000;
  * time in an answer is replaced by the page's own, as if both had waited.
  */
 export async function holdClock(page: Page): Promise<void> {
-  await page.clock.install({ time: Date.now() - headStartMs });
+  let now = Date.now() - headStartMs;
+  await page.clock.install({ time: now });
   await page.route('**/api/v1/**', async (route) => {
-    const now = await page.evaluate(() => Date.now());
+    // A page that is going away can't be asked; it doesn't read the answer either.
+    now = await page.evaluate(() => Date.now()).catch(() => now);
     // The server may close an idle connection at the very moment that it is used again.
     const answer = await route.fetch({ maxRetries: 3 });
     await route.fulfill({
