@@ -151,7 +151,7 @@ async function review(page: Page, fillId: string): Promise<void> {
   const end = stored.result.endKpa / kpaPerPsi;
   expect(Math.abs(end - target.steer)).toBeLessThanOrEqual(1);
   const shown = page.getByRole('main');
-  await expect(shown).toContainText(`${Number(end.toFixed(1))} psi`);
+  await expect(shown).toContainText(`to ${end.toFixed(1)} psi`);
   await expect(shown).toContainText(String(stored.result.timesOn));
 }
 
