@@ -1,31 +1,13 @@
-import { AxeBuilder } from '@axe-core/playwright';
 import { type Browser, expect, type Page, test } from '@playwright/test';
 import { kpaPerPsi } from '../app/units';
 import { addMember, createCoach, type NewCoachFacts } from '../tests/factories/coach';
 import { createRound } from '../tests/factories/round';
-import { createLoginSession, createUser } from '../tests/factories/user';
-import { cookieOf } from './database';
+import { createUser } from '../tests/factories/user';
+import { expectAccessible, open, signIn } from './pages';
 import { query } from './setup/server';
 
 // Two cores may be shared with a build.
 test.setTimeout(120_000);
-
-async function signIn(page: Page, userId: string): Promise<void> {
-  await page.context().addCookies([cookieOf(await createLoginSession(userId))]);
-}
-
-/** Opens a page and waits until React has taken over, so that what is typed is not lost to it. */
-async function open(page: Page, path: string): Promise<void> {
-  await page.goto(path);
-  await page.waitForFunction(
-    () => '__reactRouterDataRouter' in window && document.readyState === 'complete',
-  );
-}
-
-async function expectAccessible(page: Page): Promise<void> {
-  const { violations } = await new AxeBuilder({ page }).analyze();
-  expect(violations.map(({ id, nodes }) => `${id}: ${nodes[0]?.html}`)).toEqual([]);
-}
 
 async function ownCoach(page: Page, facts: NewCoachFacts = {}) {
   const owner = await createUser();
